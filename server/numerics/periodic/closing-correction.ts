@@ -1,0 +1,62 @@
+import { leastNormSolve } from '@/server/numerics/linear/least-norm-solve';
+import { triangularise } from '@/server/numerics/linear/triangularise';
+import { type EndRelation } from '@/server/numerics/periodic/condense-segments';
+
+/** The section as the linearised correction sees it, in sizes. */
+export interface LinearSection {
+  /** Gradient of u times the sizes, n entries. */
+  gradient: Float64Array;
+  /** u at the point. */
+  value: number;
+}
+
+/** A correction of the first node and of the period. */
+export interface ClosingCorrection {
+  /** Change of the first node, in sizes. */
+  first: Float64Array;
+  /** Change of the period, as a share of it. */
+  theta: number;
+  /** Dimension of the family that the point could move along on the section. */
+  freeDirections: number;
+}
+
+/**
+ * Solve for the smallest change of the point that closes a chain of segments on itself.
+ *
+ *   (P + Q) ξ + c θ = r,   g·ξ = −u      (the end is the start, the start stays on the section)
+ *
+ * θ is eliminated by one reflection, so that it costs nothing; of all ξ that remain the shortest is taken.
+ *
+ * @param relation  what the chain says about its ends, see condenseSegments.
+ * @param section   gradient and value of u at the first node.
+ * @param cutOff    singular values at or below cutOff·σ_max count as zero.
+ *
+ * Accuracy: that of the singular values; heuristic where they have no gap at the cut-off.
+ * Cost: one singular value decomposition of n × n.
+ * Source: least-norm Newton for under-determined systems (common practice); T free and the point held: our convention.
+ */
+export function closingCorrection(relation: EndRelation, section: LinearSection, cutOff: number): ClosingCorrection {
+  const n = relation.c.length;
+  const width = n + 2;
+  const work = new Float64Array((n + 1) * width);
+  for (let i = 0; i < n; i += 1) {
+    work[i * width] = relation.c[i]!;
+    for (let j = 0; j < n; j += 1) work[i * width + 1 + j] = relation.p[i * n + j]! + relation.q[i * n + j]!;
+    work[i * width + n + 1] = relation.r[i]!;
+  }
+  const steepness = Math.hypot(...section.gradient);
+  const last = n * width;
+  for (let j = 0; j < n; j += 1) work[last + 1 + j] = steepness === 0 ? 0 : section.gradient[j]! / steepness;
+  work[last + n + 1] = steepness === 0 ? 0 : -section.value / steepness;
+  triangularise(work, { rows: n + 1, cols: width, pivots: 1 });
+  const a = new Float64Array(n * n);
+  const b = new Float64Array(n);
+  for (let i = 0; i < n; i += 1) {
+    for (let j = 0; j < n; j += 1) a[i * n + j] = work[(i + 1) * width + 1 + j]!;
+    b[i] = work[(i + 1) * width + n + 1]!;
+  }
+  const { x, rank } = leastNormSolve({ a, rows: n, cols: n, b, cutOff });
+  let rest = work[n + 1]!;
+  for (let j = 0; j < n; j += 1) rest -= work[1 + j]! * x[j]!;
+  return { first: x, theta: rest / work[0]!, freeDirections: n - rank };
+}

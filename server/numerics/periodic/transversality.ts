@@ -1,0 +1,33 @@
+import { type Flow } from '@/server/numerics/taylor/flow';
+
+/**
+ * Compute the cosine between the section's gradient and the flow, in coordinates divided by the sizes.
+ *
+ *   cos α = Σ uᵢ fᵢ / ( √Σ (uᵢ sᵢ)² · √Σ (fᵢ / sᵢ)² )
+ *
+ * @param flow   gives f and grad u.
+ * @param x      n coordinates.
+ * @param sizes  n positive sizes, see orbitSizes.
+ * @returns      −1 … 1; 0 where the gradient or the field vanishes.
+ */
+export function transversality(flow: Flow, x: Float64Array, sizes: Float64Array): number {
+  const field = flow.field(x);
+  const gradient = flow.sectionGradient(x);
+  let speed = 0;
+  for (let i = 0; i < sizes.length; i += 1) speed += gradient[i]! * field[i]!;
+  const product = transversalScale(flow, x, sizes);
+  return product === 0 ? 0 : Math.max(-1, Math.min(1, speed / product));
+}
+
+/**
+ * The denominator of the cosine, ‖s·grad u‖ ‖f/s‖: the speed of u if the flow met the section head-on.
+ *
+ * @returns 0 where the gradient or the field vanishes.
+ */
+export function transversalScale(flow: Flow, x: Float64Array, sizes: Float64Array): number {
+  const field = flow.field(x);
+  const gradient = flow.sectionGradient(x);
+  const steepness = Math.hypot(...gradient.map((entry, i) => entry * sizes[i]!));
+  const motion = Math.hypot(...field.map((entry, i) => entry / sizes[i]!));
+  return steepness * motion;
+}

@@ -1,0 +1,91 @@
+import { buildNode } from '@/server/numerics/expression/build-node';
+import { deriveNode } from '@/server/numerics/expression/derive-node';
+import { Graph } from '@/server/numerics/expression/graph';
+import { isAffine } from '@/server/numerics/expression/is-affine';
+import { makeTape, type Tape } from '@/server/numerics/expression/tape';
+import type { FlowDefinition } from '@/server/numerics/taylor/flow';
+import { InterpretedKernel } from '@/server/numerics/taylor/interpreted-kernel';
+import type { JetKernel } from '@/server/numerics/taylor/jet-kernel';
+import { makeWasmKernel } from '@/server/numerics/taylor/wasm-kernel';
+
+/**
+ * Order of the Taylor series: ⌈−½ ln ε⌉ + 1 for ε = 10⁻¹⁶.
+ * Source: Jorba and Zou (2005), section 3; measured here to be the knee of cost against error.
+ */
+export const TAYLOR_ORDER = 20;
+/** Nodes of field and section together, after equal subexpressions have become one. */
+export const SHARED_NODES_LIMIT = 2000;
+/** Flows whose code is kept. */
+const KEPT_FLOWS = 64;
+
+/** What is built once per formula text. */
+export interface PreparedFlow {
+  order: number;
+  graph: Graph;
+  /** Roots: the field, u, div f. */
+  tape: Tape;
+  kernel: JetKernel;
+  /** Built when first asked for. */
+  variedKernel: () => JetKernel;
+  /** Roots: the field, u, the outputs; order 0 with derivatives. */
+  pointTape: Tape;
+  pointKernel: JetKernel;
+  /** u is not affine in the state: its series has a say in the step size. */
+  isCurved: boolean;
+}
+
+const kept = new Map<string, PreparedFlow>();
+
+/** The prepared flow of a definition; parameters' values play no part in it. */
+export function preparedFlow(definition: FlowDefinition): PreparedFlow {
+  const { variables, parameters, definitions, equations, section, outputs } = definition;
+  const names = [variables.map(({ name }) => name), parameters.map(({ name }) => name)];
+  const key = JSON.stringify([names, definitions, equations, section, outputs]);
+  const prepared = kept.get(key) ?? prepare(definition);
+  // Last used stands last.
+  kept.delete(key);
+  kept.set(key, prepared);
+  for (const oldest of kept.keys()) {
+    if (kept.size <= KEPT_FLOWS) break;
+    kept.delete(oldest);
+  }
+  return prepared;
+}
+
+function prepare(definition: FlowDefinition): PreparedFlow {
+  const { variables, equations, section, outputs } = definition;
+  const dimension = variables.length;
+  const graph = new Graph();
+  const names = namesOf(graph, definition);
+  const field = equations.map((equation) => buildNode(graph, equation, names));
+  const u = buildNode(graph, section, names);
+  if (graph.nodes.length > SHARED_NODES_LIMIT) {
+    throw new RangeError(`the field and the section have more than ${SHARED_NODES_LIMIT} nodes`);
+  }
+  const values = outputs.map((output) => buildNode(graph, output, names));
+  const divergence = field
+    .map((id, i) => deriveNode(graph, id, i, new Map<number, number>()))
+    .reduce((sum, term) => graph.sum(sum, term), graph.constant(0));
+  const tape = makeTape(graph, dimension, [...field, u, divergence], dimension);
+  const pointTape = makeTape(graph, dimension, [...field, u, ...values], dimension + 1);
+  let varied: JetKernel | null = null;
+  return {
+    order: TAYLOR_ORDER,
+    graph,
+    tape,
+    kernel: makeWasmKernel(tape, TAYLOR_ORDER, 0),
+    variedKernel: () => (varied ??= makeWasmKernel(tape, TAYLOR_ORDER, dimension)),
+    pointTape,
+    pointKernel: new InterpretedKernel(pointTape, 0, dimension),
+    isCurved: !isAffine(graph, u),
+  };
+}
+
+function namesOf(graph: Graph, { variables, parameters, definitions }: FlowDefinition): Map<string, number> {
+  const names = new Map<string, number>();
+  variables.forEach(({ name }, index) => names.set(name, graph.state(index)));
+  parameters.forEach(({ name }, index) => names.set(name, graph.parameter(index)));
+  for (const { name, expression } of definitions) names.set(name, buildNode(graph, expression, names));
+  names.forEach((id, name) => graph.labels.set(id, name));
+  return names;
+}

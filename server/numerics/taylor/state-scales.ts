@@ -1,0 +1,38 @@
+import type { JetKernel } from '@/server/numerics/taylor/jet-kernel';
+
+/** No coordinate's scale is below this part of the largest: errors there do not show. */
+const SMALLEST_SCALE = 1e-8;
+
+/** The size of each coordinate as far as the integration has seen it: what errors are measured against. */
+export class StateScales {
+  private readonly seen: Float64Array;
+  private readonly current: Float64Array;
+  private lastStep = 0;
+
+  constructor(start: Float64Array) {
+    this.seen = start.map(Math.abs);
+    this.current = new Float64Array(start.length);
+  }
+
+  /** Take note of a state reached by a step. */
+  see(state: Float64Array, h: number): void {
+    state.forEach((x, i) => {
+      this.seen[i] = Math.max(this.seen[i]!, Math.abs(x));
+    });
+    this.lastStep = h;
+  }
+
+  /** Scales for the step that starts from the kernel's series; a coordinate that starts at 0 counts with its speed. */
+  of(kernel: JetKernel): Float64Array {
+    const width = kernel.order + 1;
+    let largest = 0;
+    for (let i = 0; i < this.seen.length; i++) {
+      const speed = Math.abs(kernel.memory[kernel.seriesStart + i * width + 1]!);
+      this.current[i] = Math.max(this.seen[i]!, speed * this.lastStep);
+      largest = Math.max(largest, this.current[i]!);
+    }
+    const floor = largest > 0 ? SMALLEST_SCALE * largest : 1;
+    for (let i = 0; i < this.seen.length; i++) this.current[i] = Math.max(this.current[i]!, floor);
+    return this.current;
+  }
+}
