@@ -5,8 +5,7 @@ import { format, resolveConfig } from 'prettier';
 
 const folder = __dirname;
 const target = join(folder, 'generated', 'contract.ts');
-const banner =
-  '// Written by schemas/generate.ts from schemas/*.schema.json: change those and run `npm run schemas`.';
+const banner = '// Written by schemas/generate.ts from schemas/*.schema.json: change those and run `npm run schemas`.';
 
 /** Every contract of the folder as one schema, so that a type used by several contracts is declared once. */
 function wholeContract(): JSONSchema {
@@ -19,7 +18,13 @@ function wholeContract(): JSONSchema {
       return [title, { $ref: file }];
     }),
   );
-  return { title: 'Contract', type: 'object', additionalProperties: false, required: Object.keys(properties), properties };
+  return {
+    title: 'Contract',
+    type: 'object',
+    additionalProperties: false,
+    required: Object.keys(properties),
+    properties,
+  };
 }
 
 async function main(): Promise<void> {

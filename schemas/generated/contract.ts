@@ -3,38 +3,36 @@
 /**
  * What a check says.
  */
-export type Verdict =
-  "closes" | "closes-after-correction" | "does-not-close" | "inconclusive";
+export type Verdict = 'closes' | 'closes-after-correction' | 'does-not-close' | 'inconclusive';
 /**
  * stable: all multipliers inside the unit circle; saddle: some outside, others not; unstable: all outside; neutral: none outside, some on it; undecided.
  */
-export type Stability =
-  "stable" | "saddle" | "unstable" | "neutral" | "undecided";
+export type Stability = 'stable' | 'saddle' | 'unstable' | 'neutral' | 'undecided';
 /**
  * What a check found.
  */
 export type FindingCode =
-  | "already-known"
-  | "orbit-nearby"
-  | "stiff"
-  | "near-tangent-crossing"
-  | "itinerary-differs"
-  | "invariant-drifts"
-  | "not-converged"
-  | "point-off-section"
-  | "wrong-crossing-direction"
-  | "tangent-crossing"
-  | "no-return"
-  | "returns-differ"
-  | "return-times-differ"
-  | "multipliers-differ"
-  | "period-is-multiple"
-  | "equilibrium"
-  | "escapes"
-  | "singularity"
-  | "too-few-digits"
-  | "self-check-failed"
-  | "too-long";
+  | 'already-known'
+  | 'orbit-nearby'
+  | 'stiff'
+  | 'near-tangent-crossing'
+  | 'itinerary-differs'
+  | 'invariant-drifts'
+  | 'not-converged'
+  | 'point-off-section'
+  | 'wrong-crossing-direction'
+  | 'tangent-crossing'
+  | 'no-return'
+  | 'returns-differ'
+  | 'return-times-differ'
+  | 'multipliers-differ'
+  | 'period-is-multiple'
+  | 'equilibrium'
+  | 'escapes'
+  | 'singularity'
+  | 'too-few-digits'
+  | 'self-check-failed'
+  | 'too-long';
 /**
  * A number as a person types it: `[+-]digits[.digits][e[+-]digits]` or `p/q` of integers, at most 200 characters, below 1e100 in size (the size is tested after parsing). JSON numbers are accepted too.
  */
@@ -67,34 +65,26 @@ export type SectionChoice =
 /**
  * Where the machine stands with a check.
  */
-export type CheckState =
-  "none" | "queued" | "running" | "done" | "failed" | "stale";
+export type CheckState = 'none' | 'queued' | 'running' | 'done' | 'failed' | 'stale';
 /**
  * Why a submission was returned or declined.
  */
 export type ReasonCode =
-  | "does-not-close"
-  | "not-transverse"
-  | "already-known"
-  | "not-prime"
-  | "wrong-system-or-parameters"
-  | "out-of-scope"
-  | "description-lacking";
+  | 'does-not-close'
+  | 'not-transverse'
+  | 'already-known'
+  | 'not-prime'
+  | 'wrong-system-or-parameters'
+  | 'out-of-scope'
+  | 'description-lacking';
 /**
  * Where people stand with a submission.
  */
-export type ReviewState =
-  | "draft"
-  | "submitted"
-  | "in-review"
-  | "accepted"
-  | "returned"
-  | "declined"
-  | "withdrawn";
+export type ReviewState = 'draft' | 'submitted' | 'in-review' | 'accepted' | 'returned' | 'declined' | 'withdrawn';
 /**
  * Each includes the former.
  */
-export type Role = "reader" | "contributor" | "curator" | "administrator";
+export type Role = 'reader' | 'contributor' | 'curator' | 'administrator';
 
 export interface Contract {
   AcceptedAnswer: AcceptedAnswer;
@@ -298,7 +288,7 @@ export interface CheckedOrbit {
  */
 export interface Finding {
   code: FindingCode;
-  severity: "blocker" | "warning" | "note";
+  severity: 'blocker' | 'warning' | 'note';
   /**
    * a plain sentence with its figures
    */
@@ -311,7 +301,7 @@ export interface Finding {
  */
 export interface OrbitMatch {
   accession: string;
-  relation: "same" | "same-other-start" | "symmetric-image" | "multiple-of";
+  relation: 'same' | 'same-other-start' | 'symmetric-image' | 'multiple-of';
   distance: number;
   rotation: number;
   lettersDiffering: number | null;
@@ -553,7 +543,7 @@ export interface Check {
   checkState: CheckState;
   body: CheckRequest;
   progress: {
-    phase: "integrating" | "correcting" | "multipliers" | "comparing";
+    phase: 'integrating' | 'correcting' | 'multipliers' | 'comparing';
     time: number;
     period: number;
     returns: number;
@@ -651,7 +641,7 @@ export interface Confirmation {
  * A curator's decision.
  */
 export interface Decision {
-  decision: "accept" | "return" | "decline";
+  decision: 'accept' | 'return' | 'decline';
   reason?: ReasonCode;
   comment?: string;
 }
@@ -675,7 +665,7 @@ export interface EntryExport {
 export interface Entry {
   accession: string;
   revision: number;
-  status: "accepted" | "withdrawn";
+  status: 'accepted' | 'withdrawn';
   system: {
     slug: string;
     version: number;
@@ -756,7 +746,7 @@ export interface Entry {
   verdict: Verdict;
   findings: Finding[];
   evidence: {
-    level: "re-integrated" | "refined" | "proved";
+    level: 're-integrated' | 'refined' | 'proved';
     digits: number;
     engine: string;
   };
@@ -903,7 +893,7 @@ export interface OrbitPage {
   next: string | null;
   total: {
     value: number;
-    relation: "exact" | "at-least";
+    relation: 'exact' | 'at-least';
   };
   /**
    * with include=incipit: accession → the drawn coordinate along the flow as [time, value] pairs
@@ -1058,7 +1048,7 @@ export interface SubmissionPage {
   next: string | null;
   total: {
     value: number;
-    relation: "exact" | "at-least";
+    relation: 'exact' | 'at-least';
   };
   turns: {
     curator: number;
@@ -1078,7 +1068,7 @@ export interface SubmissionSummary {
   revision: number;
   reviewState: ReviewState;
   checkState: CheckState;
-  turn: ("curator" | "contributor" | "machine") | null;
+  turn: ('curator' | 'contributor' | 'machine') | null;
   verdict: Verdict | null;
   report: CheckReport | null;
   /**
@@ -1094,7 +1084,7 @@ export interface SubmissionSummary {
     attempts: number;
   } | null;
   progress: {
-    phase: "integrating" | "correcting" | "multipliers" | "comparing";
+    phase: 'integrating' | 'correcting' | 'multipliers' | 'comparing';
     time: number;
     period: number;
     returns: number;
@@ -1115,7 +1105,7 @@ export interface SubmissionSummary {
    */
   blocked: boolean;
   decision: {
-    decision: "accept" | "return" | "decline";
+    decision: 'accept' | 'return' | 'decline';
     reason: ReasonCode | null;
     comment: string | null;
     by: string;
@@ -1138,7 +1128,7 @@ export interface Submission {
   revision: number;
   reviewState: ReviewState;
   checkState: CheckState;
-  turn: ("curator" | "contributor" | "machine") | null;
+  turn: ('curator' | 'contributor' | 'machine') | null;
   verdict: Verdict | null;
   report: CheckReport | null;
   /**
@@ -1154,7 +1144,7 @@ export interface Submission {
     attempts: number;
   } | null;
   progress: {
-    phase: "integrating" | "correcting" | "multipliers" | "comparing";
+    phase: 'integrating' | 'correcting' | 'multipliers' | 'comparing';
     time: number;
     period: number;
     returns: number;
@@ -1175,7 +1165,7 @@ export interface Submission {
    */
   blocked: boolean;
   decision: {
-    decision: "accept" | "return" | "decline";
+    decision: 'accept' | 'return' | 'decline';
     reason: ReasonCode | null;
     comment: string | null;
     by: string;
@@ -1290,7 +1280,7 @@ export interface UserPage {
   next: string | null;
   total: {
     value: number;
-    relation: "exact" | "at-least";
+    relation: 'exact' | 'at-least';
   };
 }
 /**
