@@ -44,7 +44,7 @@ const SAME_DERIVATIVES = 1e-13;
 /** A run of Newton steps that did not halve the smallest correction so far leads nowhere. */
 const PATIENCE = 6;
 
-/** Newton must gain at least this factor in its last step that was not small. */
+/** Newton must gain at least this factor in the last step before its corrections are small, or in that one. */
 const LEAST_GAIN = 10;
 
 /** No step moves a node by more than this share of the orbit, nor the period by more than this share of itself. */
@@ -52,6 +52,10 @@ const LONGEST_STEP = 0.25;
 
 /** A corrected orbit smaller than this share of the one started from is an equilibrium. */
 const STANDING = 1e-6;
+
+/** A step that makes the closure worse is halved down to this share, unless the closure is rounding. */
+const SHORTEST_STEP = 1 / 16;
+const NOISE = 1e-8;
 
 /** What a corrected segment may miss by: 1e-12 + 100 ulp ‖M‖, in sizes. */
 const RESIDUAL_FLOOR = 1e-12;
@@ -78,6 +82,8 @@ export interface CorrectedOrbit {
   plan: ShootingPlan;
   period: number;
   segments: ShotSegment[];
+  /** The first run, as typed, in segments. */
+  typed: ShotSegment[];
   relation: EndRelation;
   divergenceIntegral: number;
   watch: SectionWatch;
@@ -95,8 +101,8 @@ export interface FailedCorrection {
   failure: FlowFailure | null;
   iterations: number;
   residual: number;
-  /** Derivative of the whole first run, in sizes, where it got that far. */
-  segments: ShotSegment[];
+  /** The first run, as typed, in segments; empty where it failed. */
+  typed: ShotSegment[];
   steps: number;
 }
 
@@ -123,11 +129,14 @@ class Corrector {
   private nodes: Float64Array[];
   private period: number;
   private segments: ShotSegment[] = [];
+  private typed: ShotSegment[] = [];
   private relation: EndRelation | null = null;
   private divergenceIntegral = 0;
   /** Sizes of the corrections so far: of point and period, and of all nodes. */
   private readonly corrections: { size: number; inside: number }[] = [];
   private residual = Infinity;
+  /** Where the last Newton step began, the closure there, and how much of the step was kept. */
+  private lastStep: { nodes: Float64Array[]; period: number; residual: number; share: number } | null = null;
   private steps = 0;
 
   constructor(private readonly input: CorrectionInput) {
@@ -142,6 +151,7 @@ class Corrector {
       const shot = this.shot(true);
       if (!shot.ok) return this.failed(shot);
       this.take(shot, iteration === 1);
+      if (this.wentTooFar()) continue;
       const correction = this.improve();
       if (!Number.isFinite(correction.inside) || this.period <= 0) return this.failed(null);
       this.corrections.push(correction);
@@ -168,6 +178,7 @@ class Corrector {
       this.plan = cut.plan;
       this.nodes = cut.nodes;
       this.segments = cut.segments;
+      this.typed = cut.segments;
     } else this.segments = shot.segments;
     this.divergenceIntegral = shot.divergenceIntegral;
   }
@@ -215,12 +226,25 @@ class Corrector {
     return this.move(chain.recover(first, first, theta), theta);
   }
 
+  /** Go back half of the last step where it made the closure worse; a short one is kept. */
+  private wentTooFar(): boolean {
+    this.defects();
+    const { lastStep } = this;
+    if (lastStep === null || lastStep.share < SHORTEST_STEP) return false;
+    if (this.residual < NOISE || this.residual <= lastStep.residual) return false;
+    this.nodes = this.nodes.map((node, i) => node.map((value, j) => (value + lastStep.nodes[i]![j]!) / 2));
+    this.period = (this.period + lastStep.period) / 2;
+    this.lastStep = { ...lastStep, share: lastStep.share / 2 };
+    return true;
+  }
+
   private move(changes: readonly Float64Array[], theta: number): { size: number; inside: number } {
     const { flow, sizes } = this.input;
     const field = flow.field(this.nodes[0]!);
     const ofPeriod = periodDifferenceSize(theta * this.period, this.period, field, sizes);
     const inside = Math.max(ofPeriod, ...changes.map(largestEntry));
     const share = Math.min(1, LONGEST_STEP / Math.max(Math.abs(theta), ...changes.map(largestEntry)));
+    this.lastStep = { nodes: this.nodes, period: this.period, residual: this.residual, share: 1 };
     this.nodes = this.nodes.map((node, i) => node.map((value, j) => value + share * changes[i]![j]! * sizes[j]!));
     this.period += share * theta * this.period;
     return { size: Math.max(ofPeriod, largestEntry(changes[0]!)), inside };
@@ -237,11 +261,11 @@ class Corrector {
     if (!defects.every((defect, i) => largestEntry(defect) <= this.allowed(i))) return null;
     if (!this.fellFast() || this.standsStill(watch)) return this.failed(null);
     if (renew) this.condense(defects);
-    const { nodes, plan, period, segments, divergenceIntegral, residual, steps } = this;
+    const { nodes, plan, period, segments, typed, divergenceIntegral, residual, steps } = this;
     const relation = this.relation!;
     return {
       converged: true,
-      ...{ nodes, plan, period, segments, relation, divergenceIntegral, watch, residual, steps },
+      ...{ nodes, plan, period, segments, typed, relation, divergenceIntegral, watch, residual, steps },
       iterations: this.corrections.length,
       rankCutOff: this.rankCutOff(),
       freeDirections: this.closing().freeDirections,
@@ -266,16 +290,19 @@ class Corrector {
     return earlier.length > 0 && Math.min(...sizes.slice(-PATIENCE)) > Math.min(...earlier) / 2;
   }
 
-  /** Whether the last two corrections that were not small fell at least tenfold. */
+  /** Whether a correction above the small ones, or the one that followed the last of them, fell at least tenfold. */
   private fellFast(): boolean {
-    const large = this.corrections.map(({ size }) => size).filter((size) => size > SMALL_CORRECTION);
-    if (large.length < 2) return true;
-    return large.at(-1)! * LEAST_GAIN <= large.at(-2)!;
+    const sizes = this.corrections.map(({ size }) => size);
+    const last = sizes.findLastIndex((size) => size > SMALL_CORRECTION);
+    if (last === -1) return true;
+    const into = sizes[last + 1];
+    if (into !== undefined && into * LEAST_GAIN <= sizes[last]!) return true;
+    return last > 0 && sizes[last]! * LEAST_GAIN <= sizes[last - 1]!;
   }
 
   private failed(failure: FlowFailure | null): FailedCorrection {
-    const { residual, segments, steps } = this;
-    return { converged: false, failure, iterations: this.corrections.length, residual, segments, steps };
+    const { residual, typed, steps } = this;
+    return { converged: false, failure, iterations: this.corrections.length, residual, typed, steps };
   }
 }
 

@@ -81,7 +81,25 @@ function prepare(definition: FlowDefinition): PreparedFlow {
   };
 }
 
-function namesOf(graph: Graph, { variables, parameters, definitions }: FlowDefinition): Map<string, number> {
+/** What the graph of a field is built from; of parameters only their names count. */
+interface FieldDefinition {
+  variables: readonly { name: string }[];
+  parameters: readonly { name: string }[];
+  definitions: FlowDefinition['definitions'];
+  equations: FlowDefinition['equations'];
+  section?: FlowDefinition['section'];
+}
+
+/** Nodes of a field, with its section if there is one, after equal subexpressions have become one. */
+export function countSharedNodes(definition: FieldDefinition): number {
+  const graph = new Graph();
+  const names = namesOf(graph, definition);
+  for (const equation of definition.equations) buildNode(graph, equation, names);
+  if (definition.section) buildNode(graph, definition.section, names);
+  return graph.nodes.length;
+}
+
+function namesOf(graph: Graph, { variables, parameters, definitions }: FieldDefinition): Map<string, number> {
   const names = new Map<string, number>();
   variables.forEach(({ name }, index) => names.set(name, graph.state(index)));
   parameters.forEach(({ name }, index) => names.set(name, graph.parameter(index)));
