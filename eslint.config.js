@@ -1,8 +1,8 @@
 const accessibility = require('eslint-plugin-jsx-a11y');
 const hooks = require('eslint-plugin-react-hooks');
 const typescript = require('typescript-eslint');
-const describedDisable = require('./lint/described-disable');
-const fileName = require('./lint/file-name');
+const describedDisable = require('./.lint/described-disable');
+const fileName = require('./.lint/file-name');
 
 const CODE = ['**/*.{ts,tsx}'];
 const PLAIN = ['**/*.{js,cjs,mjs}'];
@@ -57,7 +57,8 @@ module.exports = typescript.config(
     extends: [typescript.configs.strictTypeChecked],
     languageOptions: { parserOptions: { projectService: true, tsconfigRootDir: __dirname } },
     rules: {
-      '@typescript-eslint/switch-exhaustiveness-check': 'error',
+      // A default clause is a decision too.
+      '@typescript-eslint/switch-exhaustiveness-check': ['error', { considerDefaultExhaustiveForUnions: true }],
       // A number or a boolean in a template reads as meant; objects stay forbidden.
       '@typescript-eslint/restrict-template-expressions': ['error', { allowNumber: true, allowBoolean: true }],
       // `() => work()` as a callback that returns nothing is the shortest way to say it.

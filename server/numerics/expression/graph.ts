@@ -5,6 +5,12 @@ export const LARGEST_MULTIPLIED_POWER = 16;
 
 type Unary = 'exp' | 'log' | 'sin' | 'cos' | 'asin' | 'acos' | 'atan' | 'sqrt';
 
+interface Operands {
+  a: number;
+  b?: number;
+  value?: number;
+}
+
 const folded: Record<Unary, (x: number) => number> = {
   exp: Math.exp,
   log: Math.log,
@@ -30,15 +36,15 @@ export class Graph {
   private readonly known = new Map<string, number>();
 
   constant(value: number): number {
-    return this.add('constant', -1, -1, value, true);
+    return this.add('constant', { a: -1, value }, true);
   }
 
   parameter(index: number): number {
-    return this.add('parameter', -1, -1, index, true);
+    return this.add('parameter', { a: -1, value: index }, true);
   }
 
   state(index: number): number {
-    return this.add('state', -1, -1, index, false);
+    return this.add('state', { a: -1, value: index }, false);
   }
 
   sum(a: number, b: number): number {
@@ -68,7 +74,7 @@ export class Graph {
     const n = this.node(a);
     if (n.operation === 'negate') return n.a;
     if (n.operation === 'subtract') return this.difference(n.b, n.a);
-    return this.add('negate', a, -1, 0, n.isStatic);
+    return this.add('negate', { a }, n.isStatic);
   }
 
   product(a: number, b: number): number {
@@ -92,13 +98,13 @@ export class Graph {
     const n = this.node(a);
     if (n.operation === 'negate') return this.square(n.a);
     if (n.operation === 'sqrt') return n.a;
-    return this.add('square', a, -1, 0, n.isStatic);
+    return this.add('square', { a }, n.isStatic);
   }
 
   quotient(a: number, b: number): number {
     const [x, y] = [this.constantOf(a), this.constantOf(b)];
     if (x !== null && y !== null) return this.constant(x / y);
-    if (y === 1) return a;
+    if (y === 1 || x === 0) return a;
     const n = this.node(b);
     if (!n.isStatic && n.operation === 'power') return this.product(a, this.power(n.a, this.negative(n.b)));
     if (!n.isStatic && n.operation === 'sqrt') return this.product(a, this.power(n.a, this.constant(-0.5)));
@@ -119,7 +125,7 @@ export class Graph {
     const x = this.constantOf(a);
     if (x !== null) return this.constant(folded[operation](x));
     const { isStatic } = this.node(a);
-    if (isStatic) return this.add(operation, a, -1, 0, true);
+    if (isStatic) return this.add(operation, { a }, true);
     switch (operation) {
       case 'sin':
       case 'cos':
@@ -150,13 +156,14 @@ export class Graph {
     const x = this.constantOf(a);
     if (x !== null) return this.constant(x ** exponent);
     if (exponent === 0) return this.constant(1);
+    const n = this.node(a);
+    // The power of a root is one power of what stands under it: each force law becomes a single series.
+    if (n.operation === 'sqrt' && !n.isStatic && exponent !== 1) return this.constantPower(n.a, exponent / 2);
     if (Number.isInteger(exponent) && Math.abs(exponent) <= LARGEST_MULTIPLIED_POWER) {
       const positive = this.multipliedPower(a, Math.abs(exponent));
       return exponent > 0 ? positive : this.quotient(this.constant(1), positive);
     }
-    const n = this.node(a);
     if (n.isStatic) return this.combine('power', a, this.constant(exponent));
-    if (n.operation === 'sqrt') return this.constantPower(n.a, exponent / 2);
     if (exponent === 0.5) return this.unary('sqrt', a);
     return this.realPower(a, this.constant(exponent));
   }
@@ -173,31 +180,31 @@ export class Graph {
   }
 
   private sineOrCosine(operation: 'sin' | 'cos', a: number): number {
-    const sine = this.add('sin', a, -1, 0, false);
-    const cosine = this.add('cos', a, -1, 0, false);
+    const sine = this.add('sin', { a }, false);
+    const cosine = this.add('cos', { a }, false);
     this.node(sine).partner = cosine;
     this.node(cosine).partner = sine;
     return operation === 'sin' ? sine : cosine;
   }
 
   private withPartner(operation: Operation, a: number, partner: number): number {
-    const id = this.add(operation, a, -1, 0, false);
+    const id = this.add(operation, { a }, false);
     this.node(id).partner = partner;
     return id;
   }
 
   private withLaterPartner(operation: Operation, a: number, b: number, make: (id: number) => number): number {
-    const id = this.add(operation, a, b, 0, false);
+    const id = this.add(operation, { a, b }, false);
     const node = this.node(id);
     if (node.partner < 0) node.partner = make(id);
     return id;
   }
 
   private combine(operation: Operation, a: number, b: number): number {
-    return this.add(operation, a, b, 0, this.node(a).isStatic && this.node(b).isStatic);
+    return this.add(operation, { a, b }, this.node(a).isStatic && this.node(b).isStatic);
   }
 
-  private add(operation: Operation, a: number, b: number, value: number, isStatic: boolean): number {
+  private add(operation: Operation, { a, b = -1, value = 0 }: Operands, isStatic: boolean): number {
     // -0 and 0 are different constants: 1/x tells them apart.
     const key = `${operation}|${a}|${b}|${Object.is(value, -0) ? '-0' : value}`;
     const found = this.known.get(key);

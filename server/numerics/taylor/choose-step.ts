@@ -1,6 +1,6 @@
 import type { JetKernel } from '@/server/numerics/taylor/jet-kernel';
 import { stateNorm, variationNorm } from '@/server/numerics/taylor/jet-norm';
-import type { PreparedFlow } from '@/server/numerics/taylor/prepared-flow';
+import type { JetProgram } from '@/server/numerics/taylor/prepared-flow';
 import type { StateScales } from '@/server/numerics/taylor/state-scales';
 import { convergenceRadius, stepOfRadius } from '@/server/numerics/taylor/taylor-step-size';
 
@@ -10,7 +10,7 @@ import { convergenceRadius, stepOfRadius } from '@/server/numerics/taylor/taylor
  *
  * @returns h > 0, Infinity for a constant flow, NaN where a series is not finite.
  */
-export function chooseStep(prepared: PreparedFlow, kernel: JetKernel, known: StateScales): number {
+export function chooseStep({ tape, kernel }: JetProgram, known: StateScales, isCurved: boolean): number {
   const { order } = kernel;
   const scales = known.of(kernel);
   // Against 1 in units of the scales: a state passing near the origin does not ask for smaller steps.
@@ -20,15 +20,14 @@ export function chooseStep(prepared: PreparedFlow, kernel: JetKernel, known: Sta
     const [first, before, last] = [0, order - 1, order].map((k) => variationNorm(kernel, scales, k));
     step = smaller(step, stepOfRadius(convergenceRadius(first!, before!, last!, order), order));
   }
-  return prepared.isCurved ? smaller(step, curvedStep(prepared, kernel, step)) : step;
+  return isCurved ? smaller(step, curvedStep(kernel, tape.roots[tape.dimension]!, step)) : step;
 }
 
 /** Math.min would do, but it must keep NaN. */
 const smaller = (a: number, b: number): number => (b < a || Number.isNaN(b) ? b : a);
 
-function curvedStep(prepared: PreparedFlow, kernel: JetKernel, step: number): number {
+function curvedStep(kernel: JetKernel, operand: number, step: number): number {
   const { order, memory, seriesStart } = kernel;
-  const operand = prepared.tape.roots[prepared.tape.dimension]!;
   const at = (k: number): number => Math.abs(memory[seriesStart + operand * (order + 1) + k]!);
   const scale = at(0) + at(1) * (Number.isFinite(step) ? step : 0);
   return scale > 0 ? stepOfRadius(convergenceRadius(scale, at(order - 1), at(order), order), order) : step;

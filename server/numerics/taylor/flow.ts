@@ -48,7 +48,7 @@ export function createFlow(definition: FlowDefinition): Flow {
 class TaylorFlow implements Flow {
   readonly dimension: number;
   readonly order: number;
-  private readonly statics: Float64Array;
+  private readonly parameters: readonly number[];
   private readonly pointStatics: Float64Array;
 
   constructor(
@@ -57,23 +57,19 @@ class TaylorFlow implements Flow {
   ) {
     this.dimension = definition.variables.length;
     this.order = prepared.order;
-    const parameters = definition.parameters.map(({ value }) => value);
-    this.statics = staticValues(prepared.tape.statics, parameters);
-    this.pointStatics = staticValues(prepared.pointTape.statics, parameters);
+    this.parameters = definition.parameters.map(({ value }) => value);
+    this.pointStatics = staticValues(prepared.pointTape.statics, this.parameters);
   }
 
   integrate(options: IntegrateOptions): FlowResult {
     if (options.start.length !== this.dimension) {
       throw new RangeError(`the start has ${options.start.length} coordinates, not ${this.dimension}`);
     }
-    return integrate(
-      {
-        prepared: this.prepared,
-        statics: this.statics,
-        isAngle: this.definition.variables.map(({ modulus }) => modulus !== null),
-      },
-      options,
-    );
+    const { prepared } = this;
+    const program = options.variations ? prepared.varied() : prepared.plain;
+    const statics = staticValues(program.tape.statics, this.parameters);
+    const moduli = this.definition.variables.map(({ modulus }) => modulus);
+    return integrate({ prepared, program, statics, moduli }, options);
   }
 
   field(x: Float64Array): Float64Array {

@@ -1,7 +1,7 @@
 import { advance } from '@/server/numerics/taylor/advance';
 import type { JetKernel } from '@/server/numerics/taylor/jet-kernel';
 import { nameTrouble } from '@/server/numerics/taylor/name-trouble';
-import type { PreparedFlow } from '@/server/numerics/taylor/prepared-flow';
+import type { JetProgram, PreparedFlow } from '@/server/numerics/taylor/prepared-flow';
 import { chooseStep } from '@/server/numerics/taylor/choose-step';
 import { StateScales } from '@/server/numerics/taylor/state-scales';
 
@@ -58,14 +58,17 @@ export type FlowResult =
 
 export interface FlowParts {
   prepared: PreparedFlow;
+  program: JetProgram;
   statics: Float64Array;
-  isAngle: readonly boolean[];
+  /** Of the coordinates that are angles; null for the others. */
+  moduli: readonly (number | null)[];
 }
 
 /**
  * Integrate x' = f(x) over a duration by Taylor series of fixed order with variable steps.
  *
- * Time is summed with compensation. Angles are not wrapped: they run on, and whoever compares takes the nearest multiple.
+ * Time is summed with compensation. Angles are kept within half a modulus of zero while they are integrated, so that their
+ * rounding does not grow with the turns; steps and results show them running on.
  *
  * @returns the end with its derivatives, or why it ended early; a numerical failure is a value, not an exception.
  *
@@ -82,6 +85,8 @@ class Integration {
   private readonly state: Float64Array;
   private readonly varied: Float64Array;
   private readonly scales: StateScales;
+  /** What was taken off the angles: whole multiples of their moduli. */
+  private readonly turned: Float64Array;
   private readonly bound: number;
   private t = 0;
   private tLow = 0;
@@ -92,14 +97,15 @@ class Integration {
     private readonly parts: FlowParts,
     private readonly options: IntegrateOptions,
   ) {
-    const { prepared, statics } = parts;
-    this.kernel = options.variations ? prepared.variedKernel() : prepared.kernel;
+    const { program, statics, moduli } = parts;
+    this.kernel = program.kernel;
     this.kernel.memory.set(statics, 0);
     this.n = options.start.length;
     this.state = Float64Array.from(options.start);
     this.varied = new Float64Array(this.n * this.kernel.stride);
     if (this.kernel.stride > 0) for (let i = 0; i < this.n; i++) this.varied[i * this.kernel.stride + i] = 1;
-    this.scales = new StateScales(this.state);
+    this.scales = new StateScales(this.state, moduli);
+    this.turned = new Float64Array(this.n);
     this.bound = ESCAPE_FACTOR * (1 + this.state.reduce((size, x) => Math.max(size, Math.abs(x)), 0));
   }
 
@@ -109,7 +115,7 @@ class Integration {
       if (this.steps >= maxSteps) return this.failure('too-many-steps');
       if (shouldStop?.()) return this.failure('stopped');
       this.expand();
-      const wanted = chooseStep(this.parts.prepared, this.kernel, this.scales);
+      const wanted = chooseStep(this.parts.program, this.scales, this.parts.prepared.isCurved);
       if (Number.isNaN(wanted)) return this.failure('singularity');
       const isLast = wanted >= left;
       const h = isLast ? left : wanted;
@@ -153,7 +159,7 @@ class Integration {
   /** Coefficients of a root; a static one is constant along the flow. */
   private seriesOf(root: number): Float64Array {
     const { memory, seriesStart, order } = this.kernel;
-    const operand = this.parts.prepared.tape.roots[root]!;
+    const operand = this.parts.program.tape.roots[root]!;
     if (operand >= 0)
       return memory.subarray(seriesStart + operand * (order + 1), seriesStart + (operand + 1) * (order + 1));
     const constant = new Float64Array(order + 1);
@@ -176,7 +182,7 @@ class Integration {
   }
 
   private hasEscaped(): boolean {
-    return this.state.some((x, i) => !this.parts.isAngle[i] && !(Math.abs(x) <= this.bound));
+    return this.state.some((x, i) => this.parts.moduli[i] === null && !(Math.abs(x) <= this.bound));
   }
 
   private success(): FlowResult {
@@ -187,12 +193,12 @@ class Integration {
       stride > 0
         ? Float64Array.from({ length: n * n }, (_, at) => varied[Math.floor(at / n) * stride + (at % n)]!)
         : null;
-    return { ok: true, end: this.state, monodromy, divergenceIntegral: this.divergence, steps: this.steps };
+    return { ok: true, end: this.unwrapped(), monodromy, divergenceIntegral: this.divergence, steps: this.steps };
   }
 
   private failure(reason: 'singularity' | 'escape' | 'too-many-steps' | 'stopped'): FlowResult {
-    const { graph, tape } = this.parts.prepared;
-    const node = reason === 'singularity' ? nameTrouble(graph, tape, this.kernel) : null;
-    return { ok: false, reason, t: this.t + this.tLow, state: this.state, steps: this.steps, node };
+    const { prepared, program } = this.parts;
+    const node = reason === 'singularity' ? nameTrouble(prepared.graph, program.tape, this.kernel) : null;
+    return { ok: false, reason, t: this.t + this.tLow, state: this.unwrapped(), steps: this.steps, node };
   }
 }

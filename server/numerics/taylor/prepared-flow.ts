@@ -18,15 +18,21 @@ export const SHARED_NODES_LIMIT = 2000;
 /** Flows whose code is kept. */
 const KEPT_FLOWS = 64;
 
+/** A tape with the kernel that runs it. */
+export interface JetProgram {
+  /** Roots: the field, u, div f. */
+  tape: Tape;
+  kernel: JetKernel;
+}
+
 /** What is built once per formula text. */
 export interface PreparedFlow {
   order: number;
   graph: Graph;
-  /** Roots: the field, u, div f. */
-  tape: Tape;
-  kernel: JetKernel;
-  /** Built when first asked for. */
-  variedKernel: () => JetKernel;
+  /** The state alone. */
+  plain: JetProgram;
+  /** With the derivatives by the initial state; built when first asked for. */
+  varied: () => JetProgram;
   /** Roots: the field, u, the outputs; order 0 with derivatives. */
   pointTape: Tape;
   pointKernel: JetKernel;
@@ -66,15 +72,17 @@ function prepare(definition: FlowDefinition): PreparedFlow {
   const divergence = field
     .map((id, i) => deriveNode(graph, id, i, new Map<number, number>()))
     .reduce((sum, term) => graph.sum(sum, term), graph.constant(0));
-  const tape = makeTape(graph, dimension, [...field, u, divergence], dimension);
+  const program = (isVaried: boolean): JetProgram => {
+    const tape = makeTape(graph, dimension, [...field, u, divergence], isVaried ? dimension : 0);
+    return { tape, kernel: makeWasmKernel(tape, TAYLOR_ORDER, isVaried ? dimension : 0) };
+  };
   const pointTape = makeTape(graph, dimension, [...field, u, ...values], dimension + 1);
-  let varied: JetKernel | null = null;
+  let varied: JetProgram | null = null;
   return {
     order: TAYLOR_ORDER,
     graph,
-    tape,
-    kernel: makeWasmKernel(tape, TAYLOR_ORDER, 0),
-    variedKernel: () => (varied ??= makeWasmKernel(tape, TAYLOR_ORDER, dimension)),
+    plain: program(false),
+    varied: () => (varied ??= program(true)),
     pointTape,
     pointKernel: new InterpretedKernel(pointTape, 0, dimension),
     isCurved: !isAffine(graph, u),

@@ -9,15 +9,19 @@ export class StateScales {
   private readonly current: Float64Array;
   private lastStep = 0;
 
-  constructor(start: Float64Array) {
-    this.seen = start.map(Math.abs);
+  /** @param moduli of the coordinates that are angles, whose size is their modulus. */
+  constructor(
+    start: Float64Array,
+    private readonly moduli: readonly (number | null)[],
+  ) {
+    this.seen = start.map((x, i) => moduli[i] ?? Math.abs(x));
     this.current = new Float64Array(start.length);
   }
 
   /** Take note of a state reached by a step. */
   see(state: Float64Array, h: number): void {
     state.forEach((x, i) => {
-      this.seen[i] = Math.max(this.seen[i]!, Math.abs(x));
+      this.seen[i] = this.moduli[i] ?? Math.max(this.seen[i]!, Math.abs(x));
     });
     this.lastStep = h;
   }

@@ -85,7 +85,7 @@ export interface WasmImport {
 
 const vector = (items: readonly Code[]): number[] => [...unsigned(items.length), ...items.flat()];
 const section = (id: number, content: Code): number[] => [id, ...unsigned(content.length), ...content];
-const text = (value: string): number[] => vector([...asciiBytes(value)].map((byte) => [byte]));
+const text = (value: string): number[] => vector(asciiBytes(value).map((byte) => [byte]));
 const signature = ({ parameters, results }: { parameters: Code; results: Code }): Code => [
   0x60,
   ...unsigned(parameters.length),
@@ -96,7 +96,7 @@ const signature = ({ parameters, results }: { parameters: Code; results: Code })
 
 /** ASCII bytes of a short name. */
 function asciiBytes(value: string): number[] {
-  return [...value].map((letter) => letter.charCodeAt(0));
+  return Array.from({ length: value.length }, (_, index) => value.charCodeAt(index));
 }
 
 /**
