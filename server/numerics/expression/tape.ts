@@ -47,9 +47,10 @@ export interface Tape {
  * @param varied    how many of the roots, from the first on, need derivatives.
  */
 export function makeTape(graph: Graph, dimension: number, roots: readonly number[], varied: number): Tape {
-  const isVaried = reachable(graph, roots.slice(0, varied), true);
-  const needed = reachable(graph, roots, false);
-  isVaried.forEach((id) => needed.add(id));
+  const isVaried = reachable(graph, roots.slice(0, varied), () => false);
+  // The derivative of a function needs its partner's series, though not the partner's derivative.
+  const partners = [...isVaried].map((id) => graph.node(id).partner);
+  const needed = reachable(graph, [...roots, ...partners], recursOnPartner);
   const states = Array.from({ length: dimension }, (_, index) => graph.state(index));
   const ids = [...needed].filter((id) => graph.node(id).operation !== 'state').sort((x, y) => x - y);
   const slots = new Map<number, number>();
@@ -85,8 +86,12 @@ export function makeTape(graph: Graph, dimension: number, roots: readonly number
   };
 }
 
-/** Every node that the roots need; partners too where the recurrence or the derivative uses them. */
-function reachable(graph: Graph, roots: readonly number[], withDerivatives: boolean): Set<number> {
+/** Every node that the roots need, by way of operands and of those partners that the given operations ask for. */
+function reachable(
+  graph: Graph,
+  roots: readonly number[],
+  needsPartner: (operation: Operation) => boolean,
+): Set<number> {
   const seen = new Set<number>();
   const waiting = [...roots];
   for (let id = waiting.pop(); id !== undefined; id = waiting.pop()) {
@@ -94,7 +99,7 @@ function reachable(graph: Graph, roots: readonly number[], withDerivatives: bool
     seen.add(id);
     const { operation, a, b, partner, isStatic } = graph.node(id);
     waiting.push(a, b);
-    if (!isStatic && (withDerivatives || recursOnPartner(operation))) waiting.push(partner);
+    if (!isStatic && needsPartner(operation)) waiting.push(partner);
   }
   return seen;
 }

@@ -29,8 +29,8 @@ const CLOSURE_MAGNIFIED = 1e4;
 /** However far the orbit is from closing, a singular value above this is no zero. */
 const COARSEST_CUT_OFF = 1e-3;
 
-/** Newton steps before giving up; from a close start it takes two to five. */
-const MAX_ITERATIONS = 25;
+/** Newton steps, halvings included, before giving up; from a close start it takes two to five. */
+const MAX_ITERATIONS = 16;
 
 /** A correction of point and period below this leaves only rounding. */
 const SMALL_CORRECTION = 1e-10;

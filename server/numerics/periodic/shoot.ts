@@ -1,10 +1,10 @@
 import { multiplyMatrices } from '@/server/numerics/linear/multiply-matrices';
 import { type ShootingPlan } from '@/server/numerics/periodic/shooting-plan';
 import { type SectionWatch } from '@/server/numerics/section/create-section-watch';
-import { type Flow, type FlowResult } from '@/server/numerics/taylor/flow';
+import { type Flow, type FlowResult, type TaylorStep } from '@/server/numerics/taylor/flow';
 
 /** A piece whose volume shrinks or grows by more than exp of this is halved: its derivative would drown in rounding. */
-const MAX_VOLUME_LOG = 16;
+const MAX_VOLUME_LOG = 9;
 
 /** How often a piece may be halved. */
 const MAX_HALVINGS = 8;
@@ -93,7 +93,7 @@ class Run {
       duration: share.to * period - begin,
       variations,
       maxSteps: Math.max(1, maxSteps - this.steps),
-      ...(watch === undefined ? {} : { onStep: (step) => watch.onStep(step) }),
+      ...(watch === undefined ? {} : { onStep: (step: TaylorStep) => void watch.onStep(step) }),
       ...(shouldStop === undefined ? {} : { shouldStop }),
     });
     this.steps += result.steps;
@@ -112,8 +112,6 @@ class Run {
 
   private halves(segment: ShotSegment, { from, to }: { from: number; to: number }, depth: number): FlowFailure | null {
     const middle = (from + to) / 2;
-    return (
-      this.piece(segment, { from, to: middle }, depth + 1) ?? this.piece(segment, { from: middle, to }, depth + 1)
-    );
+    return this.piece(segment, { from, to: middle }, depth + 1) ?? this.piece(segment, { from: middle, to }, depth + 1);
   }
 }

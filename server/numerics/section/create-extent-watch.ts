@@ -1,5 +1,6 @@
 import { horner } from '@/server/numerics/section/horner';
 import { polishRoot } from '@/server/numerics/section/polish-root';
+import { polynomialSlope } from '@/server/numerics/section/polynomial-slope';
 import { type TaylorStep } from '@/server/numerics/taylor/flow';
 
 /** Smallest and largest value of each coordinate. */
@@ -40,11 +41,12 @@ export function createExtentWatch(dimension: number): ExtentWatch {
       const length = state.length / dimension;
       for (let i = 0; i < dimension; i += 1) {
         const from = i * length;
-        include(i, state[from]!);
-        const reach = sizes(state, from, length, h);
-        if (state[from]! + reach <= highest[i]! && state[from]! - reach >= lowest[i]!) continue;
+        const start = state[from]!;
+        include(i, start);
+        const reach = possibleMove(state, from, length, h);
+        if (start + reach <= highest[i]! && start - reach >= lowest[i]!) continue;
         include(i, horner(state, h, from, length));
-        const turn = turningPoint(state.subarray(from, from + length), h);
+        const turn = turningPoint(state, { from, length, h });
         if (turn !== null) include(i, horner(state, turn, from, length));
       }
     },
@@ -52,18 +54,22 @@ export function createExtentWatch(dimension: number): ExtentWatch {
 }
 
 /** Σ |xₖ| hᵏ over k ≥ 1: how far the coordinate can move in the step. */
-function sizes(state: Float64Array, from: number, length: number, h: number): number {
+function possibleMove(state: Float64Array, from: number, length: number, h: number): number {
   let sum = 0;
   for (let k = length - 1; k >= 1; k -= 1) sum = (sum + Math.abs(state[from + k]!)) * h;
   return sum;
 }
 
 /** Time in (0, h) at which the coordinate turns, or null. */
-function turningPoint(x: Float64Array, h: number): number | null {
-  const slope = Float64Array.from({ length: x.length - 1 }, (_, k) => (k + 1) * x[k + 1]! * h ** k);
-  const before = slope[0]!;
-  const after = horner(slope, 1);
+function turningPoint(
+  state: Float64Array,
+  { from, length, h }: { from: number; length: number; h: number },
+): number | null {
+  const before = state[from + 1]!;
+  const after = polynomialSlope(state, h, from, length);
   if (before === 0 || after === 0 || before > 0 === after > 0) return null;
+  const slope = new Float64Array(length - 1);
+  for (let k = 1, power = 1; k < length; k += 1, power *= h) slope[k - 1] = k * state[from + k]! * power;
   const sign = before > 0 ? 1 : -1;
   return h * polishRoot(slope, { low: 0, high: 1, before: sign, after: sign === 1 ? -1 : 1, tangent: false });
 }

@@ -54,6 +54,7 @@ export function createSectionWatch(dimension: number): SectionWatch {
   let side: 1 | -1 | 0 = 0;
   let largest = 0;
   let counted = 0;
+  let unit = new Float64Array(0);
 
   function record(step: TaylorStep, s: number, direction: 1 | -1 | 0): void {
     zeros.push({ ...timeOf(step, s, start), state: stateAt(step, s, dimension), direction });
@@ -75,11 +76,13 @@ export function createSectionWatch(dimension: number): SectionWatch {
   }
 
   function findNearMisses(step: TaylorStep, c: Float64Array): void {
-    const size = c.reduce((sum, entry) => sum + Math.abs(entry), 0);
+    let size = 0;
+    for (let k = 0; k < c.length; k += 1) size += Math.abs(c[k]!);
     largest = Math.max(largest, Math.abs(c[0]!));
     const near = NEAR * Math.max(size, largest);
     if (2 * Math.abs(c[0]!) - size > near) return;
-    const slope = Float64Array.from({ length: c.length - 1 }, (_, k) => (k + 1) * c[k + 1]!);
+    const slope = new Float64Array(c.length - 1);
+    for (let k = 1; k < c.length; k += 1) slope[k - 1] = k * c[k]!;
     for (const interval of isolateRoots(slope)) {
       const { s } = zeroIn(slope, interval);
       const value = horner(c, s);
@@ -100,7 +103,8 @@ export function createSectionWatch(dimension: number): SectionWatch {
     },
     onStep(step) {
       extents.onStep(step);
-      const c = unitCoefficients(step);
+      if (unit.length !== step.section.length) unit = new Float64Array(step.section.length);
+      const c = unitCoefficients(step, unit);
       findZeros(step, c);
       findNearMisses(step, c);
       isFirst = false;
@@ -108,9 +112,8 @@ export function createSectionWatch(dimension: number): SectionWatch {
   };
 }
 
-/** Coefficients of u in the step fraction s ∈ [0, 1]. */
-function unitCoefficients({ section, h }: TaylorStep): Float64Array {
-  const c = new Float64Array(section.length);
+/** Coefficients of u in the step fraction s ∈ [0, 1], written to c. */
+function unitCoefficients({ section, h }: TaylorStep, c: Float64Array): Float64Array {
   let power = 1;
   for (let k = 0; k < c.length; k += 1) {
     c[k] = section[k]! * power;
@@ -121,9 +124,8 @@ function unitCoefficients({ section, h }: TaylorStep): Float64Array {
 
 /** Sign just after the start of the step: that of the first coefficient that is not zero. */
 function firstSign(c: Float64Array): 1 | -1 | 0 {
-  const entry = c.find((value) => value !== 0);
-  if (entry === undefined) return 0;
-  return entry > 0 ? 1 : -1;
+  for (let k = 0; k < c.length; k += 1) if (c[k] !== 0) return c[k]! > 0 ? 1 : -1;
+  return 0;
 }
 
 function zeroIn(c: Float64Array, interval: RootInterval): { s: number; direction: 1 | -1 | 0 } {
@@ -142,7 +144,9 @@ function timeOf(step: TaylorStep, s: number, start: WatchStart): { time: number;
 
 function stateAt({ state, h }: TaylorStep, s: number, dimension: number): Float64Array {
   const length = state.length / dimension;
-  return Float64Array.from({ length: dimension }, (_, i) => horner(state, s * h, i * length, length));
+  const x = new Float64Array(dimension);
+  for (let i = 0; i < dimension; i += 1) x[i] = horner(state, s * h, i * length, length);
+  return x;
 }
 
 function curvatureAt(c: Float64Array, s: number, h: number): number {

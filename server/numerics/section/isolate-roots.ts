@@ -44,7 +44,8 @@ export function isolateRoots(c: Float64Array): RootInterval[] {
   }
   if (Math.abs(c[0]!) > rest || (c[0] === 0 && rest === 0)) return [];
   if (c.length > 1 && Math.abs(c[1]!) > slopes) return monotoneRoot(c);
-  const largest = c.reduce((size, entry) => Math.max(size, Math.abs(entry)), 0);
+  let largest = 0;
+  for (let k = 0; k < c.length; k += 1) largest = Math.max(largest, Math.abs(c[k]!));
   const found: RootInterval[] = [];
   descend({ b: bernsteinCoefficients(c), low: 0, high: 1, depth: 0 }, ZERO_BAND * largest, found);
   return found;
@@ -52,7 +53,8 @@ export function isolateRoots(c: Float64Array): RootInterval[] {
 
 function monotoneRoot(c: Float64Array): RootInterval[] {
   const start = c[0]!;
-  const end = c.reduce((sum, entry) => sum + entry, 0);
+  let end = 0;
+  for (let k = c.length - 1; k >= 0; k -= 1) end += c[k]!;
   if (!((start < 0 && end > 0) || (start > 0 && end < 0))) return [];
   const before = start < 0 ? -1 : 1;
   return [{ low: 0, high: 1, before, after: before === 1 ? -1 : 1, tangent: false }];

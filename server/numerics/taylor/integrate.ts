@@ -29,8 +29,8 @@ export interface IntegrateOptions {
   duration: number;
   variations: boolean;
   maxSteps: number;
-  /** Called for every step before it is taken; true stops the integration there. */
-  onStep?: (step: TaylorStep) => boolean | undefined;
+  /** Called for every step before it is taken; true, and nothing else, stops the integration there. */
+  onStep?: (step: TaylorStep) => unknown;
   /** Asked before every step; true stops. */
   shouldStop?: () => boolean;
 }
@@ -85,8 +85,8 @@ class Integration {
   private readonly state: Float64Array;
   private readonly varied: Float64Array;
   private readonly scales: StateScales;
-  /** What was taken off the angles: whole multiples of their moduli. */
-  private readonly turned: Float64Array;
+  /** Whole moduli taken off each angle. */
+  private readonly turns: Float64Array;
   private readonly bound: number;
   private t = 0;
   private tLow = 0;
@@ -105,7 +105,7 @@ class Integration {
     this.varied = new Float64Array(this.n * this.kernel.stride);
     if (this.kernel.stride > 0) for (let i = 0; i < this.n; i++) this.varied[i * this.kernel.stride + i] = 1;
     this.scales = new StateScales(this.state, moduli);
-    this.turned = new Float64Array(this.n);
+    this.turns = new Float64Array(this.n);
     this.bound = ESCAPE_FACTOR * (1 + this.state.reduce((size, x) => Math.max(size, Math.abs(x)), 0));
   }
 
@@ -134,8 +134,8 @@ class Integration {
   private expand(): void {
     const { kernel, n } = this;
     const width = kernel.order + 1;
+    this.setOrderZero(this.state);
     for (let i = 0; i < n; i++) {
-      kernel.memory[kernel.seriesStart + i * width] = this.state[i]!;
       for (let d = 0; d < kernel.stride; d++) {
         kernel.memory[kernel.variationsStart + i * width * kernel.stride + d] = this.varied[i * kernel.stride + d]!;
       }
@@ -146,6 +146,7 @@ class Integration {
   private view(h: number): TaylorStep {
     const { memory, seriesStart, order } = this.kernel;
     const width = order + 1;
+    this.setOrderZero(this.unwrapped());
     return {
       index: this.steps,
       t: this.t,
@@ -168,6 +169,7 @@ class Integration {
   }
 
   private take(h: number): void {
+    this.setOrderZero(this.state);
     advance(this.kernel, h, { state: this.state, varied: this.varied });
     const divergence = this.seriesOf(this.n + 1);
     let integral = 0;
@@ -179,6 +181,26 @@ class Integration {
     this.tLow = low - (sum - this.t);
     this.t = sum;
     this.scales.see(this.state, h);
+    this.wrapAngles();
+  }
+
+  private wrapAngles(): void {
+    this.parts.moduli.forEach((modulus, i) => {
+      if (modulus === null) return;
+      const turns = Math.round(this.state[i]! / modulus);
+      this.state[i]! -= turns * modulus;
+      this.turns[i]! += turns;
+    });
+  }
+
+  /** The state with its angles running on. */
+  private unwrapped(): Float64Array {
+    return this.state.map((x, i) => x + this.turns[i]! * (this.parts.moduli[i] ?? 0));
+  }
+
+  private setOrderZero(state: Float64Array): void {
+    const { memory, seriesStart, order } = this.kernel;
+    for (let i = 0; i < this.n; i++) memory[seriesStart + i * (order + 1)] = state[i]!;
   }
 
   private hasEscaped(): boolean {

@@ -31,10 +31,19 @@ export function nameTrouble(graph: Graph, tape: Tape, kernel: JetKernel): string
     if (value < smallest || Number.isNaN(value)) {
       smallest = Number.isNaN(value) ? 0 : value;
       const node = tape.steps[operand]!.node;
-      words = `${graph.labels.get(node) ?? partOf(step)} = 0`;
+      words = `${graph.labels.get(node) ?? rootOf(graph, node) ?? partOf(step)} = 0`;
     }
   }
   return words;
+}
+
+/** A name given to the square root of a node: it vanishes where the node does. */
+function rootOf(graph: Graph, id: number): string | null {
+  for (const [labelled, name] of graph.labels) {
+    const { operation, a } = graph.node(labelled);
+    if (operation === 'sqrt' && a === id) return name;
+  }
+  return null;
 }
 
 const partOf = (step: TapeStep): string => {
