@@ -1,0 +1,227 @@
+import { type CheckReport, type Finding } from '@/schemas/generated/contract';
+import { type CheckProgress } from '@/server/checks/check-progress';
+import { type Claim } from '@/server/checks/claim';
+import { multiplierClaims, returnClaims } from '@/server/checks/claims';
+import { correctedAsClosed, typedAsClosed } from '@/server/checks/closed-orbit';
+import { convergence } from '@/server/checks/convergence';
+import { decimalOf } from '@/server/checks/decimal-of';
+import { digitsOf, expectedClosure, tooFewDigits } from '@/server/checks/digits';
+import { equilibrium } from '@/server/checks/equilibrium';
+import { invariantDrift } from '@/server/checks/invariants';
+import { itineraryClaim } from '@/server/checks/itinerary';
+import { alreadyKnown, matchOrbits, type CatalogueOrbit } from '@/server/checks/match-orbits';
+import { noReturn } from '@/server/checks/no-return';
+import { primePeriod, primeReturns } from '@/server/checks/prime';
+import { rawRun, returnsToSection, type RunControl } from '@/server/checks/raw-run';
+import { checkedOrbit, closureOf, correctionOf, emptyReport } from '@/server/checks/report';
+import { runFailure } from '@/server/checks/run-failure';
+import { selfCheck } from '@/server/checks/self-check';
+import { crossingDirection, offSection, startPoint } from '@/server/checks/start-point';
+import { stiffness } from '@/server/checks/stiffness';
+import { type RawRun, type Study, type Survey } from '@/server/checks/study';
+import { SuggestionFinder } from '@/server/checks/suggestion';
+import { surveyOrbit } from '@/server/checks/survey-orbit';
+import { isTangent, transversalityFindings } from '@/server/checks/transversality';
+import { shiftsOf, verdictOf } from '@/server/checks/verdict';
+import { correctOrbit } from '@/server/numerics/periodic/correct-orbit';
+import { smallestTransversality } from '@/server/numerics/periodic/smallest-transversality';
+
+type Answer = Omit<CheckReport, 'engine'>;
+
+/** How a claim is to be checked. */
+export interface CheckControl {
+  maxSteps: number;
+  catalogue: readonly CatalogueOrbit[];
+  /** In a submission an orbit that is known already is a blocker, in a trial a note. */
+  isSubmission: boolean;
+  shouldStop?: (() => boolean) | undefined;
+  onProgress?: ((progress: CheckProgress) => void) | undefined;
+}
+
+/** Steps between two reports of progress. */
+const STEPS_PER_REPORT = 256;
+
+/** Checks one claim, station by station; each station ends the check or hands over to the next. */
+export class ClaimCheck {
+  steps = 0;
+
+  constructor(
+    private readonly claim: Claim,
+    private readonly control: CheckControl,
+  ) {}
+
+  /** The point itself: can the field be evaluated, does it stand still, does it lie on the section? */
+  run(): Answer {
+    const { claim } = this;
+    const point = startPoint(claim);
+    const field = claim.flow.field(point.start);
+    if (!field.every(Number.isFinite)) {
+      const failure = { ok: false, reason: 'singularity', t: 0, state: point.start, steps: 0, node: null } as const;
+      return this.answer({ findings: [runFailure(failure, claim.variables, this.control.maxSteps)] });
+    }
+    const atRest = equilibrium(claim, point.start);
+    if (atRest.length > 0) return this.answer({ findings: atRest });
+    const onSection = point.beyond === 0;
+    const raw = rawRun(claim, { start: point.start, onSection, period: claim.period.value }, this.runControl());
+    if (!raw.ok) {
+      const isLimit = raw.reason === 'stopped' || raw.reason === 'too-many-steps';
+      const findings = [runFailure(raw, claim.variables, this.control.maxSteps)];
+      return this.answer({ verdict: isLimit ? 'inconclusive' : 'does-not-close', findings });
+    }
+    this.steps += raw.stepEnds.length;
+    const off = offSection(claim, point, raw.sizes);
+    if (off.length > 0) return this.answer(this.ofRaw(raw, off));
+    return this.direction(raw);
+  }
+
+  /** The section: is it crossed the counted way, and does the flow come back to it? */
+  private direction(raw: RawRun): Answer {
+    const { claim } = this;
+    const wrong = crossingDirection(claim, raw.start, raw.sizes);
+    if (wrong.length > 0) {
+      return this.answer({ ...this.ofRaw(raw, wrong), suggestion: this.suggestions().negatedSection(raw) });
+    }
+    if (!returnsToSection(claim, raw, claim.period.value, this.runControl())) {
+      return this.answer(this.ofRaw(raw, [...noReturn(raw, claim.period.value), ...this.tangency(raw)]));
+    }
+    return this.correction(raw);
+  }
+
+  /** Newton, and the verdict. */
+  private correction(raw: RawRun): Answer {
+    const { claim, control } = this;
+    const correction = correctOrbit({
+      flow: claim.flow,
+      start: raw.start,
+      period: claim.period.value,
+      stepEnds: raw.stepEnds,
+      sizes: raw.sizes,
+      moduli: claim.moduli,
+      maxSteps: control.maxSteps,
+      shouldStop: control.shouldStop,
+      onIteration: (iteration) => this.report({ phase: 'correcting', iteration }, raw),
+    });
+    this.steps += correction.steps;
+    const failure = correction.converged ? null : correction.failure;
+    if (failure !== null && (failure.reason === 'stopped' || failure.reason === 'too-many-steps')) {
+      const findings = [runFailure(failure, claim.variables, control.maxSteps)];
+      return this.answer({ ...this.ofRaw(raw, findings), verdict: 'inconclusive' });
+    }
+    const shifts = shiftsOf(claim, raw, correction);
+    const verdict = verdictOf(claim.tolerance, raw, shifts);
+    const closed = correction.converged
+      ? correctedAsClosed(claim, raw, correction)
+      : verdict === 'closes'
+        ? typedAsClosed(claim, raw, this.runControl())
+        : null;
+    this.report({ phase: 'measuring', iteration: correction.iterations }, raw);
+    const survey = closed === null ? null : surveyOrbit(claim, closed);
+    const expected = expectedClosure(claim, raw, correction.typed);
+    return this.findings({ claim, raw, correction, shifts, verdict, survey, expectedClosure: expected });
+  }
+
+  /** Everything that is said about a closed or nearly closed orbit. */
+  private findings(study: Study): Answer {
+    const { claim, raw, correction, shifts, verdict, survey } = study;
+    const isOpen = verdict === 'does-not-close';
+    const few = tooFewDigits(study);
+    const findings = [...few, ...(few.length > 0 ? [] : convergence(study))];
+    if (survey === null) findings.push(...this.tangency(raw));
+    else {
+      if (isOpen || isTangent(survey)) survey.primeReturns = survey.crossings.length;
+      else survey.primeReturns = primeReturns(claim, raw, survey, this.runControl());
+      findings.push(...(isOpen ? [] : this.ofClosed(survey)), ...selfCheck(survey));
+      findings.push(...stiffness(raw.stepEnds.length, survey.crossings.length));
+    }
+    const matches = this.matches(study);
+    if (!isOpen) findings.push(...alreadyKnown(matches, this.control.isSubmission));
+    return this.answer({
+      ...this.ofRaw(raw, findings),
+      verdict,
+      correction: correction.converged && shifts !== null ? correctionOf(correction, shifts) : null,
+      orbit: survey === null ? null : checkedOrbit(survey),
+      matches,
+      digits: digitsOf(study),
+      expectedClosure: study.expectedClosure,
+      suggestion: this.suggestionFor(study),
+    });
+  }
+
+  /** Claims about returns are not judged where a tangency leaves their number undefined. */
+  private ofClosed(survey: Survey): Finding[] {
+    const { claim } = this;
+    const counted = isTangent(survey)
+      ? []
+      : [...primePeriod(survey), ...returnClaims(claim, survey), ...itineraryClaim(claim.itinerary, survey.itinerary)];
+    return [
+      ...transversalityFindings(survey),
+      ...counted,
+      ...multiplierClaims(claim, survey),
+      ...invariantDrift(survey),
+    ];
+  }
+
+  private matches({ raw, survey }: Study): CheckReport['matches'] {
+    if (survey === null || this.control.catalogue.length === 0) return [];
+    this.report({ phase: 'comparing' }, raw);
+    return matchOrbits(this.claim, survey, this.control.catalogue);
+  }
+
+  private suggestionFor(study: Study): CheckReport['suggestion'] {
+    const { survey, verdict, raw } = study;
+    if (verdict === 'does-not-close') return this.suggestions().forOpenOrbit(study);
+    if (survey === null || survey.primeReturns === survey.crossings.length) return null;
+    return this.suggestions().primePeriod(raw.start, survey.crossings[survey.primeReturns - 1]!.time);
+  }
+
+  private suggestions(): SuggestionFinder {
+    const { maxSteps, shouldStop } = this.control;
+    return new SuggestionFinder(this.claim, { maxSteps, shouldStop });
+  }
+
+  private tangency(raw: RawRun): Finding[] {
+    const { zeros, nearMisses } = raw.watch;
+    const start = { time: 0, timeLow: 0, state: raw.start, direction: 1 as const };
+    const smallest = smallestTransversality(this.claim.flow, { zeros: [start, ...zeros], nearMisses }, raw.sizes);
+    return transversalityFindings({ smallest });
+  }
+
+  private ofRaw(raw: RawRun, findings: Finding[]): Partial<Answer> {
+    const { tolerance } = this.claim;
+    return {
+      verdict: verdictOf(tolerance, raw, null),
+      closure: closureOf(raw, tolerance),
+      endPoint: Array.from(raw.end, decimalOf),
+      findings,
+    };
+  }
+
+  private answer(known: Partial<Answer>): Answer {
+    return { ...emptyReport, findings: [], matches: [], ...known };
+  }
+
+  private runControl(): RunControl {
+    const { maxSteps, shouldStop } = this.control;
+    let steps = 0;
+    return {
+      maxSteps,
+      shouldStop,
+      onStep: (time, watch) => {
+        steps += 1;
+        if (steps % STEPS_PER_REPORT === 1) this.report({ phase: 'integrating', time }, { watch });
+      },
+    };
+  }
+
+  private report(known: Pick<CheckProgress, 'phase'> & Partial<CheckProgress>, { watch }: Pick<RawRun, 'watch'>): void {
+    const period = this.claim.period.value;
+    this.control.onProgress?.({
+      time: period,
+      iteration: 0,
+      ...known,
+      period,
+      returns: watch.counted(),
+      crossings: watch.zeros.length,
+    });
+  }
+}

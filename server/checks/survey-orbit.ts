@@ -1,0 +1,120 @@
+import { type Claim } from '@/server/checks/claim';
+import { itineraryOf } from '@/server/checks/itinerary';
+import { invariantsAlong } from '@/server/checks/invariants';
+import { SAME_ORBIT } from '@/server/checks/limits';
+import { type Survey } from '@/server/checks/study';
+import { multiplyMatrices } from '@/server/numerics/linear/multiply-matrices';
+import { type EndRelation } from '@/server/numerics/periodic/condense-segments';
+import { floquetMultipliers, type Multiplier } from '@/server/numerics/periodic/floquet-multipliers';
+import { frobeniusNorm } from '@/server/numerics/periodic/frobenius-norm';
+import { judgeStability } from '@/server/numerics/periodic/judge-stability';
+import { orbitCrossings } from '@/server/numerics/periodic/orbit-crossings';
+import { scaleMatrix } from '@/server/numerics/periodic/scale-matrix';
+import { settleUnits } from '@/server/numerics/periodic/settle-units';
+import { type ShotSegment } from '@/server/numerics/periodic/shoot';
+import { smallestRepetition } from '@/server/numerics/periodic/smallest-repetition';
+import { smallestTransversality } from '@/server/numerics/periodic/smallest-transversality';
+import { transversality } from '@/server/numerics/periodic/transversality';
+import { unitMultiplicity } from '@/server/numerics/periodic/unit-multiplicity';
+import { type SectionWatch } from '@/server/numerics/section/create-section-watch';
+import { type Flow } from '@/server/numerics/taylor/flow';
+
+/** Multipliers are known to at least this; a modulus nearer to 1 cannot be told from it. */
+const CIRCLE_FLOOR = 1e-8;
+
+/** Rounding of the multipliers of a matrix of norm 1, with room for their condition. */
+const CIRCLE_ROUNDING = 1e3 * Number.EPSILON;
+
+/** A closed orbit as integrated, ready to be measured. */
+export interface ClosedOrbit {
+  start: Float64Array;
+  period: number;
+  sizes: Float64Array;
+  watch: SectionWatch;
+  segments: readonly ShotSegment[];
+  relation: EndRelation;
+  rankCutOff: number;
+  divergenceIntegral: number;
+  winding: (number | null)[] | null;
+}
+
+/**
+ * Measure a closed orbit: crossings, multipliers, stability, transversality, itinerary, invariants, self-checks.
+ *
+ * @returns null when its multipliers cannot be computed.
+ */
+export function surveyOrbit(claim: Claim, orbit: ClosedOrbit): Survey | null {
+  const { flow, moduli } = claim;
+  const { start, period, sizes, watch } = orbit;
+  const multipliers = multipliersOf(flow, orbit);
+  if (multipliers === null) return null;
+  const unitMultipliers = multipliers.filter(isUnit).length;
+  const crossings = orbitCrossings(watch.zeros, period, start);
+  const points = crossings.map(({ state }) => state);
+  const zeros = [...watch.zeros, { time: 0, timeLow: 0, state: start, direction: 1 as const }];
+  const { lowest, highest } = watch.extent();
+  return {
+    ...{ start, period, sizes, crossings, multipliers, unitMultipliers, winding: orbit.winding },
+    extent: Array.from(lowest, (low, i) => [low, highest[i]!]),
+    ...judgeStability({
+      multipliers: withoutTrivial(multipliers),
+      accuracy: Math.max(CIRCLE_FLOOR, CIRCLE_ROUNDING * wholeNorm(orbit)),
+      divergenceIntegral: orbit.divergenceIntegral,
+    }),
+    flowCheck: flowCheck(flow, orbit),
+    liouville: liouville(multipliers, orbit.divergenceIntegral),
+    smallest: smallestTransversality(flow, { zeros, nearMisses: watch.nearMisses }, sizes),
+    transversalities: points.map((point) => transversality(flow, point, sizes)),
+    itinerary: itineraryOf(claim, points),
+    invariants: invariantsAlong(claim, points, sizes),
+    primeReturns: smallestRepetition({ points, sizes, moduli }, SAME_ORBIT),
+  };
+}
+
+/** The multipliers without the one trivial 1. */
+export function withoutTrivial(multipliers: readonly Multiplier[]): Multiplier[] {
+  const trivial = multipliers.findIndex(isUnit);
+  return multipliers.filter((_, i) => i !== trivial);
+}
+
+function isUnit({ re, im, logModulus }: Multiplier): boolean {
+  return re === 1 && im === 0 && logModulus === 0;
+}
+
+function multipliersOf(flow: Flow, { segments, sizes, relation, rankCutOff }: ClosedOrbit): Multiplier[] | null {
+  const pieces = segments.flatMap((segment) => segment.pieces.map((piece) => scaleMatrix(piece, sizes)));
+  const found = floquetMultipliers(pieces, flow.dimension);
+  if (found === null) return null;
+  // The flow's own direction is always one, also where its rank is hidden by rounding.
+  return settleUnits(found, Math.max(1, unitMultiplicity(relation, rankCutOff)));
+}
+
+/** Norm of the whole derivative, in sizes. */
+function wholeNorm({ segments, sizes }: ClosedOrbit): number {
+  const n = sizes.length;
+  const whole = segments
+    .map(({ monodromy }) => scaleMatrix(monodromy!, sizes))
+    .reduce((earlier, later) => multiplyMatrices(later, earlier, n, n));
+  return frobeniusNorm(whole);
+}
+
+/** Largest ‖M f(start) − f(end)‖ / (‖M‖ ‖f(start)‖) of the segments, in sizes. */
+function flowCheck(flow: Flow, { segments, sizes }: ClosedOrbit): number {
+  const n = sizes.length;
+  let largest = 0;
+  for (const { starts, end, monodromy } of segments) {
+    const before = flow.field(starts[0]!).map((entry, i) => entry / sizes[i]!);
+    const after = flow.field(end).map((entry, i) => entry / sizes[i]!);
+    const m = scaleMatrix(monodromy!, sizes);
+    const image = multiplyMatrices(m, before, n, n);
+    const miss = Math.hypot(...image.map((entry, i) => entry - after[i]!));
+    largest = Math.max(largest, miss / (frobeniusNorm(m) * Math.hypot(...before)));
+  }
+  return largest;
+}
+
+/** Σ log|λ| − ∫ div f dt; null where a multiplier vanished in rounding. */
+function liouville(multipliers: readonly Multiplier[], divergenceIntegral: number): number | null {
+  const sum = multipliers.reduce((total, { logModulus }) => total + logModulus, 0);
+  return Number.isFinite(sum) ? sum - divergenceIntegral : null;
+}
