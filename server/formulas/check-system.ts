@@ -1,6 +1,7 @@
 import type { SystemDocument } from '@/schemas/generated/contract';
 import { checkAngles } from '@/server/formulas/check-angles';
 import type { CheckedSection, CheckedSystem, ContentError } from '@/server/formulas/checked-system';
+import { dependsOnState } from '@/server/formulas/depends-on-state';
 import { ErrorList, segment } from '@/server/formulas/error-list';
 import { evaluate } from '@/server/formulas/evaluate';
 import { formatFormula } from '@/server/formulas/format-formula';
@@ -11,6 +12,7 @@ import {
   SYSTEM_CHARACTERS_LIMIT,
   VARIABLES_LIMIT,
 } from '@/server/formulas/limits';
+import { NO_SURFACE } from '@/server/formulas/parse-section';
 import { isReservedName } from '@/server/formulas/to-expression';
 import type { Expression } from '@/server/numerics/expression/expression';
 import { countSharedNodes, SHARED_NODES_LIMIT } from '@/server/numerics/taylor/prepared-flow';
@@ -49,6 +51,7 @@ class SystemReader {
     const { document, names } = this;
     const system = { document, variables, parameters, definitions, equations, invariants, symmetries, sections, names };
     this.checkNodes(system);
+    this.checkSurfaces(system);
     for (const error of checkAngles(system)) this.list.add(error.path, error.message);
     return this.list.errors.length > 0 ? this.refused() : { ok: true, system };
   }
@@ -118,17 +121,16 @@ class SystemReader {
   }
 
   private equations(): Expression[] {
-    const { variables, equations } = this.document;
-    const given = new Map(Object.entries(equations));
-    const known = new Set(variables.map(({ name }) => name));
-    for (const name of given.keys()) {
-      if (!known.has(name)) this.list.add(`/equations/${segment(name)}`, `${name} is not a variable of the system.`);
-    }
-    return this.mapOf('/equations', given, (name) => `The equation of ${name} is missing.`);
+    return this.mapOf('/equations', this.document.equations, (name) => `The equation of ${name} is missing.`);
   }
 
   /** One expression a variable, from a map by variable. */
-  private mapOf(path: string, given: ReadonlyMap<string, string>, missing: (name: string) => string): Expression[] {
+  private mapOf(path: string, map: Record<string, string>, missing: (name: string) => string): Expression[] {
+    const given = new Map(Object.entries(map));
+    const known = new Set(this.document.variables.map(({ name }) => name));
+    for (const name of given.keys()) {
+      if (!known.has(name)) this.list.add(`${path}/${segment(name)}`, `${name} is not a variable of the system.`);
+    }
     return this.document.variables.flatMap(({ name }) => {
       const text = given.get(name);
       if (text === undefined) {
@@ -151,11 +153,7 @@ class SystemReader {
     return (this.document.symmetries ?? []).map(({ name, map, reversesTime }, index) => ({
       name,
       reversesTime,
-      map: this.mapOf(
-        `/symmetries/${index}/map`,
-        new Map(Object.entries(map)),
-        (missing) => `The image of ${missing} is missing.`,
-      ),
+      map: this.mapOf(`/symmetries/${index}/map`, map, (missing) => `The image of ${missing} is missing.`),
     }));
   }
 
@@ -166,11 +164,23 @@ class SystemReader {
       if (seen.has(section.name)) this.list.add(`${path}/name`, `Two sections are named ${section.name}.`);
       seen.add(section.name);
       const expression = this.list.formula(`${path}/formula`, section.formula, this.names);
+      this.incipit(path, section.incipit?.coordinate);
       const letters: CheckedSection['letters'] = (section.letters ?? []).flatMap(({ letter, where }, place) => {
         const condition = this.list.formula(`${path}/letters/${place}/where`, where, this.names);
         return condition ? [{ letter, expression: condition }] : [];
       });
       return expression ? [{ name: section.name, formula: formatFormula(expression), expression, letters }] : [];
+    });
+  }
+
+  private incipit(path: string, coordinate: string | undefined): void {
+    if (coordinate === undefined || this.document.variables.some(({ name }) => name === coordinate)) return;
+    this.list.add(`${path}/incipit/coordinate`, `${coordinate} is not a variable of the system.`);
+  }
+
+  private checkSurfaces(system: CheckedSystem): void {
+    system.sections.forEach(({ expression }, index) => {
+      if (!dependsOnState(system, expression)) this.list.add(`/sections/${index}/formula`, NO_SURFACE);
     });
   }
 

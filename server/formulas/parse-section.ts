@@ -1,10 +1,15 @@
 import type { SectionChoice } from '@/schemas/generated/contract';
 import { changesWith } from '@/server/formulas/check-angles';
 import type { CheckedSection, CheckedSystem, ContentError } from '@/server/formulas/checked-system';
+import { dependsOnState } from '@/server/formulas/depends-on-state';
 import { ErrorList } from '@/server/formulas/error-list';
 import { formatFormula } from '@/server/formulas/format-formula';
+import { sameExpression } from '@/server/formulas/same-expression';
 import type { TypedNumberRead } from '@/server/formulas/typed-number';
 import { countSharedNodes, SHARED_NODES_LIMIT } from '@/server/numerics/taylor/prepared-flow';
+
+/** Said of a formula that is the same number everywhere. */
+export const NO_SURFACE = 'The section holds no variable: it is not a surface.';
 
 export type SectionResult = { ok: true; section: CheckedSection } | { ok: false; errors: ContentError[] };
 
@@ -31,6 +36,7 @@ export function parseSection(system: CheckedSystem, choice: SectionChoice, base 
 function sectionOf(system: CheckedSystem, text: string, path: string, list: ErrorList): CheckedSection | null {
   const expression = list.formula(path, text, system.names);
   if (expression === null) return null;
+  if (!dependsOnState(system, expression)) list.add(path, NO_SURFACE);
   for (const angle of system.variables) {
     if (angle.modulus !== null && changesWith(system, expression, angle)) {
       list.add(
@@ -46,9 +52,8 @@ function sectionOf(system: CheckedSystem, text: string, path: string, list: Erro
       `Field and section together have at most ${SHARED_NODES_LIMIT} different subexpressions; here they have ${nodes}.`,
     );
   }
-  const formula = formatFormula(expression);
-  const named = system.sections.find((section) => section.formula === formula);
-  return named ?? { name: null, formula, expression, letters: [] };
+  const named = system.sections.find((section) => sameExpression(section.expression, expression));
+  return named ?? { name: null, formula: formatFormula(expression), expression, letters: [] };
 }
 
 type Plane = Extract<SectionChoice, { plane: unknown }>['plane'];

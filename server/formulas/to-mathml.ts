@@ -4,6 +4,8 @@ import type { Expression } from '@/server/numerics/expression/expression';
 
 /** Combining dot above: a derivative by time. */
 const DOT = '\u0307';
+/** The same as a sign of its own. */
+const OVER = '\u02d9';
 const TIMES = '\u2062';
 const MINUS = '\u2212';
 
@@ -55,25 +57,32 @@ function binary({ operator, left, right }: Extract<Expression, { kind: 'binary' 
     case '-':
       return `${inner(left)}<mo>${MINUS}</mo>${enclosed(right, 2)}`;
     case '*':
-      return `${enclosed(left, 2)}<mo>${between(left, right)}</mo>${enclosed(right, 3)}`;
+      return `${enclosed(left, 2)}<mo>${between(left, right)}</mo>${enclosed(right, 4)}`;
     case '/':
       return `<mfrac>${row(left)}${row(right)}</mfrac>`;
     case '^':
-      return `<msup><mrow>${enclosed(left, 5)}</mrow>${row(right)}</msup>`;
+      return `<msup>${base(left)}${row(right)}</msup>`;
   }
 }
 
-/** Between two numbers a dot is needed; elsewhere a product is set without a sign. */
-const between = (left: Expression, right: Expression): string =>
-  endsInNumber(left) && startsWithNumber(right) ? '·' : TIMES;
+/** A product is set without a sign, unless two numbers or words would run into one another. */
+const between = (left: Expression, right: Expression): string => {
+  const next = firstOf(right);
+  return next.kind === 'number' || (isWord(next) && isWord(lastOf(left))) ? '·' : TIMES;
+};
 
-const endsInNumber = (expression: Expression): boolean =>
-  expression.kind === 'number' ||
-  (expression.kind === 'binary' && expression.operator === '*' && endsInNumber(expression.right));
+/** What stands at the right end of an expression as it is set; a fraction is one thing. */
+const lastOf = (expression: Expression): Expression =>
+  expression.kind === 'binary' && expression.operator === '*' ? lastOf(expression.right) : expression;
 
-const startsWithNumber = (expression: Expression): boolean =>
-  expression.kind === 'number' ||
-  (expression.kind === 'binary' && expression.operator !== '/' && startsWithNumber(expression.left));
+const firstOf = (expression: Expression): Expression =>
+  expression.kind === 'binary' && (expression.operator === '*' || expression.operator === '^')
+    ? firstOf(expression.left)
+    : expression;
+
+/** A name of several letters. */
+const isWord = (expression: Expression): boolean =>
+  expression.kind === 'name' && expression.name.length > 1 && !greekLetters.has(expression.name);
 
 function call(name: string, argument: Expression): string {
   if (name === 'sqrt') return `<msqrt>${row(argument)}</msqrt>`;
@@ -82,17 +91,35 @@ function call(name: string, argument: Expression): string {
 }
 
 const enclosed = (expression: Expression, least: number): string =>
-  bindingOf(expression) >= least || isFraction(expression)
-    ? inner(expression)
-    : `<mo>(</mo>${inner(expression)}<mo>)</mo>`;
+  bindingOf(expression) >= least || isFraction(expression) ? inner(expression) : parenthesised(expression);
 
-/** A fraction's bar encloses it, except under a power. */
+const parenthesised = (expression: Expression): string => `<mo>(</mo>${inner(expression)}<mo>)</mo>`;
+
+/** What a power is raised from: anything but a number or a name stands in parentheses. */
+const base = (expression: Expression): string => {
+  const isAtom = ['number', 'constant', 'name'].includes(expression.kind);
+  return `<mrow>${isAtom ? inner(expression) : parenthesised(expression)}</mrow>`;
+};
+
+/** A fraction's bar encloses it. */
 const isFraction = (expression: Expression): boolean => expression.kind === 'binary' && expression.operator === '/';
 
-/** A name: Greek where it is a Greek letter's, digits at its end as an index. */
+/**
+ * A name: Greek where it is a Greek letter's; digits at its end, or what follows its first underscore, as an index.
+ * The dot of a derivative stands after a single letter, and over the whole of a longer name.
+ */
 export function identifier(name: string, accent = ''): string {
-  const [, letters = name, digits = ''] = /^([A-Za-z]+?)_?([0-9]*)$/.exec(name) ?? [];
-  const symbol = `${greekLetters.get(letters) ?? letters}${accent}`;
-  const word = letters.length > 1 && !greekLetters.has(letters) && accent === '' ? ' mathvariant="italic"' : '';
-  return digits ? `<msub><mi${word}>${symbol}</mi><mn>${digits}</mn></msub>` : `<mi${word}>${symbol}</mi>`;
+  const [, letters = name, index = ''] = /^([A-Za-z]+)_?([0-9]+|(?<=_).+)?$/.exec(name) ?? [];
+  const symbol = greekLetters.get(letters) ?? letters;
+  const letter = symbolOf(symbol, accent);
+  return index ? `<msub>${letter}${indexOf(index)}</msub>` : letter;
 }
+
+function symbolOf(symbol: string, accent: string): string {
+  if (symbol.length === 1) return `<mi>${symbol}${accent}</mi>`;
+  const word = `<mi mathvariant="italic">${symbol}</mi>`;
+  return accent === '' ? word : `<mover accent="true">${word}<mo>${OVER}</mo></mover>`;
+}
+
+const indexOf = (index: string): string =>
+  /^[0-9]+$/.test(index) ? `<mn>${index}</mn>` : `<mi mathvariant="italic">${greekLetters.get(index) ?? index}</mi>`;

@@ -40,6 +40,9 @@ export function readTypedNumber(typed: string | number): TypedNumberResult {
   if (Math.abs(number.value) >= NUMBER_SIZE_LIMIT) {
     return { ok: false, message: `“${text}” is too large: numbers are smaller than ${NUMBER_SIZE_LIMIT}.` };
   }
+  if (number.value === 0 && number.digits > 0) {
+    return { ok: false, message: `“${text}” is too small: a double holds nothing between 0 and 5e-324.` };
+  }
   return { ok: true, number };
 }
 
