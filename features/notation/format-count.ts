@@ -1,0 +1,2 @@
+/** A count with commas: `8,030`. */
+export const formatCount = (count: number): string => String(count).replace(/\B(?=(\d{3})+$)/g, ',');
