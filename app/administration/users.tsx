@@ -1,0 +1,5 @@
+import { UsersScreen } from '@/features/administration/users-screen';
+
+export default function UsersRoute() {
+  return <UsersScreen />;
+}

@@ -1,0 +1,7 @@
+import { useLocalSearchParams } from 'expo-router';
+import { SubmissionScreen } from '@/features/desk/submission-screen';
+
+export default function SubmissionRoute() {
+  const { submissionId } = useLocalSearchParams<{ submissionId: string }>();
+  return <SubmissionScreen submissionId={submissionId} />;
+}

@@ -1,0 +1,5 @@
+import { DeskScreen } from '@/features/desk/desk-screen';
+
+export default function DeskRoute() {
+  return <DeskScreen />;
+}

@@ -1,0 +1,5 @@
+import { SystemsScreen } from '@/features/systems/systems-screen';
+
+export default function SystemsRoute() {
+  return <SystemsScreen />;
+}
