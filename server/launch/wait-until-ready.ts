@@ -23,7 +23,8 @@ export async function waitUntilReady(url: string, say: (line: string) => void, s
 async function readiness(url: string): Promise<{ ready: boolean; waitingFor: string }> {
   try {
     const answer = await fetch(url, { signal: AbortSignal.timeout(REQUEST_TIMEOUT_MS) });
-    return { ready: answer.status === 200, waitingFor: answer.ok ? '' : await answer.text() };
+    const body = (await answer.json()) as { detail?: string };
+    return { ready: answer.status === 200, waitingFor: body.detail ?? '' };
   } catch {
     return { ready: false, waitingFor: 'the web server does not answer yet' };
   }

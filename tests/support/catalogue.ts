@@ -53,7 +53,9 @@ export async function addLorenzEntries(
     const sectionId = await namedSection(client, systemId);
     const accessions: string[] = [];
     for (const orbit of orbits) {
-      accessions.push(await addEntry(client, { orbit, systemId, sectionId, contributorId, curatorId: curator.id, change }));
+      accessions.push(
+        await addEntry(client, { orbit, systemId, sectionId, contributorId, curatorId: curator.id, change }),
+      );
     }
     await client.query('commit');
     return accessions;

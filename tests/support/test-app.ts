@@ -13,7 +13,10 @@ import { type Config, readConfig } from '@/server/config';
 import { createLog } from '@/server/log';
 import { defineModels } from '@/server/models';
 import { User } from '@/server/models/user';
+import { createCheckWatch } from '@/server/services/check-watch';
 import { hashPassword } from '@/server/services/hash-password';
+import { createTracer } from '@/server/services/tracer';
+import { threadPool } from '@/server/thread-pool';
 import { freshDatabase, type TestDatabase } from './database';
 
 /** The application on a database of its own, without a port. */
@@ -38,13 +41,16 @@ export async function testApp(change: Partial<Config> = {}): Promise<TestApp> {
   defineModels(db);
   const pool = new Pool({ connectionString: database.url, max: 4 });
   pool.on('error', () => undefined);
-  const dependencies: AppDependencies = { config, db, pool, log: createLog(config, 'test') };
+  const log = createLog(config, 'test');
+  const checks = createCheckWatch(database.url, log);
+  const tracer = createTracer(() => threadPool(1));
+  const dependencies: AppDependencies = { config, db, pool, log, checks, tracer };
   return {
     app: buildApp(dependencies),
     dependencies,
     database,
     close: async () => {
-      await Promise.all([db.close(), pool.end()]);
+      await Promise.all([db.close(), pool.end(), checks.close(), tracer.close()]);
       await database.drop();
       rmSync(stateFolder, { recursive: true, force: true });
     },

@@ -1,0 +1,58 @@
+import type { MessagePort } from 'node:worker_threads';
+import type { CheckReport, CheckRequest, SystemDocument, Trace } from '@/schemas/generated/contract';
+import { type CheckProgress } from '@/server/checks/check-progress';
+import { checkOrbit } from '@/server/checks/check-orbit';
+import type { CatalogueOrbit } from '@/server/checks/match-orbits';
+import { traceOrbit, type TraceRequest } from '@/server/checks/trace-orbit';
+import { checkSystem } from '@/server/formulas/check-system';
+
+/** One check for a thread of the pool. */
+export interface CheckTask {
+  document: SystemDocument;
+  body: CheckRequest;
+  isSubmission: boolean;
+  catalogue: CatalogueOrbit[];
+  /** Computing time after which the check ends itself with what it has. */
+  seconds: number;
+  /** Where progress is told; transferred. */
+  progress: MessagePort;
+}
+
+export interface TraceTask {
+  request: TraceRequest;
+  seconds: number;
+}
+
+/** Progress is told at most twice a second. */
+const PROGRESS_EVERY_MS = 500;
+
+/** Check one orbit. */
+export function check({ document, body, isSubmission, catalogue, seconds, progress }: CheckTask): CheckReport {
+  const checked = checkSystem(document);
+  if (!checked.ok) throw new RangeError(`the system does not parse: ${checked.errors[0]?.message ?? ''}`);
+  let toldAt = 0;
+  try {
+    return checkOrbit({
+      system: checked.system,
+      claim: body,
+      isSubmission,
+      catalogue,
+      shouldStop: after(seconds),
+      onProgress: (news: CheckProgress) => {
+        if (Date.now() - toldAt < PROGRESS_EVERY_MS) return;
+        toldAt = Date.now();
+        progress.postMessage(news);
+      },
+    });
+  } finally {
+    progress.close();
+  }
+}
+
+/** Draw one orbit. */
+export const trace = ({ request, seconds }: TraceTask): Omit<Trace, 'closes'> => traceOrbit(request, after(seconds));
+
+function after(seconds: number): () => boolean {
+  const end = Date.now() + seconds * 1000;
+  return () => Date.now() >= end;
+}

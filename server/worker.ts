@@ -1,0 +1,109 @@
+import { randomUUID } from 'node:crypto';
+import { EventEmitter } from 'node:events';
+import { Logger, run, type Runner, type WorkerEvents } from 'graphile-worker';
+import { Pool } from 'pg';
+import { Sequelize } from 'sequelize';
+import { readConfig, requireDatabaseUrl } from '@/server/config';
+import { installContent } from '@/server/demo/install-content';
+import { checkOrbitJob } from '@/server/jobs/check-orbit';
+import { sendMail } from '@/server/jobs/send-mail';
+import { tidyUp } from '@/server/jobs/tidy-up';
+import { createLog } from '@/server/log';
+import { createMailer } from '@/server/mail/mailer';
+import { defineModels } from '@/server/models';
+import type { Desk } from '@/server/services/desk';
+import { createTracer } from '@/server/services/tracer';
+import { beat, BEAT_EVERY_MS, leave, takeOverJobs } from '@/server/services/worker-life';
+import { threadPool } from '@/server/thread-pool';
+
+/** Jobs beside the checks: mails, housekeeping. */
+const OTHER_JOBS = 2;
+/** A running check may finish for so long after the order to stop; then it goes back to the queue. */
+const FINISH_MS = 3_000;
+/** The process is gone this long after the order to stop, whatever hangs. */
+const STOP_PATIENCE_MS = 15_000;
+const POLL_MS = 1_000;
+/** Every minute. */
+const TIDY_UP = '* * * * * tidy-up';
+
+const config = readConfig();
+const log = createLog(config, 'worker');
+const databaseUrl = requireDatabaseUrl(config);
+const concurrency = config.workerThreads + OTHER_JOBS;
+const pool = new Pool({ connectionString: databaseUrl, max: concurrency + 2 });
+pool.on('error', (error) => log.warn({ err: error }, 'an idle connection to the database was lost'));
+pool.on('connect', (client) => client.on('error', (error) => log.warn({ err: error }, 'a connection was lost')));
+const db = new Sequelize(databaseUrl, { dialect: 'postgres', logging: false, pool: { max: concurrency + 2 } });
+defineModels(db);
+
+const desk: Desk = { db, publicUrl: config.publicUrl };
+const threads = threadPool(config.workerThreads);
+const tracer = createTracer(() => threads);
+const mailer = createMailer(config);
+const stopping = new AbortController();
+const id = randomUUID();
+const queueIds: string[] = [];
+const events: WorkerEvents = new EventEmitter();
+events.on('worker:create', ({ worker }) => queueIds.push(worker.workerId));
+
+async function start(): Promise<{ runner: Runner; heart: NodeJS.Timeout }> {
+  await beat(db, { id, queueIds });
+  const runner = await run({
+    pgPool: pool,
+    concurrency,
+    pollInterval: POLL_MS,
+    noHandleSignals: true,
+    events,
+    crontab: TIDY_UP,
+    logger: new Logger(() => (level, message, meta) => {
+      if (level !== 'debug' && level !== 'info') log[level === 'error' ? 'error' : 'warn'](meta ?? {}, message);
+    }),
+    taskList: {
+      'check-orbit': checkOrbitJob({ desk, threads, log, stopping: stopping.signal }),
+      'send-mail': sendMail(mailer),
+      'tidy-up': tidyUp(desk),
+    },
+  });
+  const live = (): Promise<unknown> => beat(db, { id, queueIds }).then(() => takeOverJobs(desk));
+  await live();
+  const heart = setInterval(() => {
+    live().catch((error: unknown) => log.warn({ err: error }, 'heartbeat'));
+  }, BEAT_EVERY_MS);
+  runner.promise.catch((error: unknown) => log.error({ err: error }, 'the queue ended'));
+  log.info(`at work with ${config.workerThreads} threads`);
+  return { runner, heart };
+}
+
+async function stop({ runner, heart }: Awaited<ReturnType<typeof start>>): Promise<void> {
+  log.info('stopping');
+  setTimeout(() => process.exit(1), STOP_PATIENCE_MS).unref();
+  const giveBack = setTimeout(() => stopping.abort(), FINISH_MS);
+  await runner.stop();
+  clearTimeout(giveBack);
+  clearInterval(heart);
+  await leave(db, id);
+  await Promise.all([threads.destroy(), mailer.close(), db.close(), pool.end()]);
+}
+
+const started = start();
+let isStopping = false;
+for (const signal of ['SIGINT', 'SIGTERM'] as const) {
+  process.on(signal, () => {
+    if (isStopping) return;
+    isStopping = true;
+    started.then(stop).then(
+      () => process.exit(0),
+      (error: unknown) => {
+        log.error({ err: error }, 'stopping');
+        process.exit(1);
+      },
+    );
+  });
+}
+started
+  .then(() => installContent({ config, desk, tracer, log, signal: stopping.signal }))
+  .catch((error: unknown) => {
+    if (isStopping) return;
+    log.fatal({ err: error }, 'the worker cannot go on');
+    process.exit(1);
+  });
