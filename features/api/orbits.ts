@@ -1,0 +1,118 @@
+import {
+  infiniteQueryOptions,
+  keepPreviousData,
+  queryOptions,
+  useInfiniteQuery,
+  useQuery,
+} from '@tanstack/react-query';
+import type { Entry, EntryRevision, OrbitPage, Trace } from '@/schemas/generated/contract';
+import { apiAddress, getJson, type Query } from '@/features/api/client';
+
+/** What a catalogue search can ask for, under the names of the API. Every field is part of the cache key. */
+export interface OrbitFilter {
+  system?: string;
+  parameters?: Record<string, string>;
+  /** A period to the digits given. */
+  period?: string;
+  periodMin?: string;
+  periodMax?: string;
+  returns?: string;
+  stability?: string;
+  itinerary?: string;
+  evidence?: string;
+  text?: string;
+  /** Coordinates, separated by commas. */
+  near?: string;
+  sort?: string;
+}
+
+export type ExportFormat = 'json' | 'ndjson' | 'csv';
+
+/** Points of the polyline that a figure draws. */
+const TRACE_POINTS = 2000;
+/** Results on one page of a search. */
+const PAGE_SIZE = 25;
+const SEARCH_FRESH_MS = 60_000;
+
+/** A filter as query parameters of the API. */
+export function filterQuery(filter: OrbitFilter): Query {
+  const { parameters = {}, ...rest } = filter;
+  const named = Object.entries(parameters).map(([name, value]) => [`parameters[${name}]`, value] as const);
+  return { ...rest, ...Object.fromEntries(named) };
+}
+
+/** The address of an export of exactly this result. */
+export const exportAddress = (filter: OrbitFilter, format: ExportFormat): string =>
+  apiAddress(`/orbits.${format}`, filterQuery(filter));
+
+/** The address of one entry as a file. */
+export const entryAddress = (accession: string, format: 'json' | 'csv'): string =>
+  apiAddress(`/orbits/${encodeURIComponent(accession)}.${format}`);
+
+const root = ['orbit'] as const;
+const pathOf = (accession: string) => `/orbits/${encodeURIComponent(accession)}`;
+
+export const orbitQueries = {
+  root,
+
+  /** Entries change only by a new revision or a withdrawal: a cached one stays fresh for the visit. */
+  one: (accession: string) =>
+    queryOptions({
+      queryKey: [...root, 'one', accession] as const,
+      queryFn: ({ signal }) => getJson<Entry>(pathOf(accession), { signal }),
+      staleTime: Infinity,
+    }),
+
+  trace: (accession: string) =>
+    queryOptions({
+      queryKey: [...root, 'trace', accession] as const,
+      queryFn: ({ signal }) =>
+        getJson<Trace>(`${pathOf(accession)}/trace`, { query: { points: TRACE_POINTS }, signal }),
+      staleTime: Infinity,
+    }),
+
+  revisions: (accession: string) =>
+    queryOptions({
+      queryKey: [...root, 'revisions', accession] as const,
+      queryFn: ({ signal }) => getJson<{ items: EntryRevision[] }>(`${pathOf(accession)}/revisions`, { signal }),
+      staleTime: Infinity,
+    }),
+
+  search: (filter: OrbitFilter) =>
+    infiniteQueryOptions({
+      queryKey: [...root, 'search', filter] as const,
+      queryFn: ({ pageParam, signal }) =>
+        getJson<OrbitPage>('/orbits', {
+          query: { ...filterQuery(filter), include: 'incipit', limit: PAGE_SIZE, after: pageParam },
+          signal,
+        }),
+      initialPageParam: '',
+      getNextPageParam: (page) => page.next,
+      staleTime: SEARCH_FRESH_MS,
+    }),
+
+  /** A few entries, for a list inside a page. */
+  few: (filter: OrbitFilter, limit: number) =>
+    queryOptions({
+      queryKey: [...root, 'few', filter, limit] as const,
+      queryFn: ({ signal }) =>
+        getJson<OrbitPage>('/orbits', { query: { ...filterQuery(filter), include: 'incipit', limit }, signal }),
+      staleTime: SEARCH_FRESH_MS,
+    }),
+};
+
+/** One entry, by its accession. */
+export const useOrbit = (accession: string) => useQuery(orbitQueries.one(accession));
+
+/** The polyline of one entry. */
+export const useOrbitTrace = (accession: string) => useQuery(orbitQueries.trace(accession));
+
+export const useOrbitRevisions = (accession: string) => useQuery(orbitQueries.revisions(accession));
+
+/** The catalogue, page after page, under a filter; the former result stays while a new one is on its way. */
+export const useOrbitSearch = (filter: OrbitFilter) =>
+  useInfiniteQuery({ ...orbitQueries.search(filter), placeholderData: keepPreviousData });
+
+/** A few entries under a filter; `enabled` holds it back until the filter is known. */
+export const useFewOrbits = (filter: OrbitFilter, limit: number, enabled = true) =>
+  useQuery({ ...orbitQueries.few(filter, limit), enabled });

@@ -1,0 +1,12 @@
+import type { OrbitPage } from '@/schemas/generated/contract';
+
+const commas = new Intl.NumberFormat('en-GB');
+
+/** A whole number in running text, with commas. */
+export const wholeNumber = (value: number): string => commas.format(value);
+
+/** "12 orbits", "1 orbit", "more than 10,000 orbits". */
+export function countWords(total: OrbitPage['total']): string {
+  const orbits = total.value === 1 ? '1 orbit' : `${wholeNumber(total.value)} orbits`;
+  return total.relation === 'at-least' ? `more than ${orbits}` : orbits;
+}
