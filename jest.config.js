@@ -23,6 +23,8 @@ const webTransform = {
       babelrc: false,
       configFile: false,
       presets: ['babel-preset-expo'],
+      // What a page fetches when it first needs it is an ordinary require here.
+      plugins: ['@babel/plugin-transform-dynamic-import'],
       caller: { name: 'metro', bundler: 'metro', platform: 'web' },
     },
   ],

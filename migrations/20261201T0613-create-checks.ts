@@ -41,8 +41,8 @@ export const up: Migration = inTransaction(`
   comment on column orbit_check.system_id is 'null: the body holds a whole system document';
   comment on column orbit_check.address_hash is 'keyed hash of the address of somebody without account, for the limits';
   comment on column orbit_check.seconds is 'computing time it may take';
-  create index orbit_check_by_owner on orbit_check (owner_id, created_at) where owner_id is not null;
-  create index orbit_check_by_address on orbit_check (address_hash, created_at) where address_hash is not null;
+  create index orbit_check_by_owner on orbit_check (owner_id, finished_at) where owner_id is not null;
+  create index orbit_check_by_address on orbit_check (address_hash, finished_at) where address_hash is not null;
   create index orbit_check_by_revision on orbit_check (submission_id, revision, created_at)
     where submission_id is not null;
   create index orbit_check_private_by_age on orbit_check (created_at) where submission_id is null;

@@ -29,7 +29,7 @@ export const up: Migration = inTransaction(`
     contributor_id      uuid             not null,
     curator_id          uuid             not null,
     submitted_at        timestamptz      not null,
-    accepted_at         timestamptz      not null default now(),
+    accepted_at         timestamptz      not null default clock_timestamp(),
     withdrawn_at        timestamptz,
     withdrawal_reason   text,
     replacement         integer,

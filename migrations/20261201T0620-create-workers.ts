@@ -13,12 +13,6 @@ export const up: Migration = inTransaction(`
   );
   comment on column worker.queue_ids is 'names under which the process locks jobs';
   create index worker_by_beat on worker (beat_at);
-
-  create table installation (
-    name text        primary key,
-    at   timestamptz not null default now()
-  );
-  comment on table installation is 'what a worker has put in place: built-in systems, demo content';
 `);
 
-export const down: Migration = inTransaction('drop table installation; drop table worker;');
+export const down: Migration = inTransaction('drop table worker;');

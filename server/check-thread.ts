@@ -3,8 +3,10 @@ import type { CheckReport, CheckRequest, SystemDocument, Trace } from '@/schemas
 import { type CheckProgress } from '@/server/checks/check-progress';
 import { checkOrbit } from '@/server/checks/check-orbit';
 import type { CatalogueOrbit } from '@/server/checks/match-orbits';
-import { traceOrbit, type TraceRequest } from '@/server/checks/trace-orbit';
+import { traceOrbit } from '@/server/checks/trace-orbit';
 import { checkSystem } from '@/server/formulas/check-system';
+import type { CheckedSystem } from '@/server/formulas/checked-system';
+import type { TraceRequest } from '@/server/services/tracer';
 
 /** One check for a thread of the pool. */
 export interface CheckTask {
@@ -18,22 +20,15 @@ export interface CheckTask {
   progress: MessagePort;
 }
 
-export interface TraceTask {
-  request: TraceRequest;
-  seconds: number;
-}
-
 /** Progress is told at most twice a second. */
 const PROGRESS_EVERY_MS = 500;
 
 /** Check one orbit. */
 export function check({ document, body, isSubmission, catalogue, seconds, progress }: CheckTask): CheckReport {
-  const checked = checkSystem(document);
-  if (!checked.ok) throw new RangeError(`the system does not parse: ${checked.errors[0]?.message ?? ''}`);
   let toldAt = 0;
   try {
     return checkOrbit({
-      system: checked.system,
+      system: parsed(document),
       claim: body,
       isSubmission,
       catalogue,
@@ -50,7 +45,17 @@ export function check({ document, body, isSubmission, catalogue, seconds, progre
 }
 
 /** Draw one orbit. */
-export const trace = ({ request, seconds }: TraceTask): Omit<Trace, 'closes'> => traceOrbit(request, after(seconds));
+export function trace({ document, points, ...orbit }: TraceRequest): Trace {
+  const drawn = traceOrbit(parsed(document), orbit, points);
+  if (drawn === null) throw new RangeError('the orbit cannot be read');
+  return drawn;
+}
+
+function parsed(document: SystemDocument): CheckedSystem {
+  const checked = checkSystem(document);
+  if (!checked.ok) throw new RangeError(`the system does not parse: ${checked.errors[0]?.message ?? ''}`);
+  return checked.system;
+}
 
 function after(seconds: number): () => boolean {
   const end = Date.now() + seconds * 1000;

@@ -16,7 +16,6 @@ export const problemCodes = {
   'not-found': { status: 404, title: 'There is nothing at this address' },
   'unknown-accession': { status: 404, title: 'No entry has this accession' },
   'wrong-check-character': { status: 404, title: 'The accession has a slip in it' },
-  'method-not-allowed': { status: 405, title: 'This address does not take this method' },
   'not-acceptable': { status: 406, title: 'The answer is not available in this form' },
   'wrong-state': { status: 409, title: 'The submission is in another state' },
   'claimed-by-another': { status: 409, title: 'Another curator holds this submission' },

@@ -11,6 +11,7 @@ import { tidyUp } from '@/server/jobs/tidy-up';
 import { createLog } from '@/server/log';
 import { createMailer } from '@/server/mail/mailer';
 import { defineModels } from '@/server/models';
+import { createCheckWatch } from '@/server/services/check-watch';
 import type { Desk } from '@/server/services/desk';
 import { createTracer } from '@/server/services/tracer';
 import { beat, BEAT_EVERY_MS, leave, takeOverJobs } from '@/server/services/worker-life';
@@ -18,6 +19,8 @@ import { threadPool } from '@/server/thread-pool';
 
 /** Jobs beside the checks: mails, housekeeping. */
 const OTHER_JOBS = 2;
+/** Threads that draw what the demo accepts; they start when there is something to draw. */
+const DRAWING_THREADS = 1;
 /** A running check may finish for so long after the order to stop; then it goes back to the queue. */
 const FINISH_MS = 3_000;
 /** The process is gone this long after the order to stop, whatever hangs. */
@@ -38,7 +41,8 @@ defineModels(db);
 
 const desk: Desk = { db, publicUrl: config.publicUrl };
 const threads = threadPool(config.workerThreads);
-const tracer = createTracer(() => threads);
+const tracer = createTracer(() => threadPool(DRAWING_THREADS));
+const checks = createCheckWatch(databaseUrl, log);
 const mailer = createMailer(config);
 const stopping = new AbortController();
 const id = randomUUID();
@@ -46,43 +50,58 @@ const queueIds: string[] = [];
 const events: WorkerEvents = new EventEmitter();
 events.on('worker:create', ({ worker }) => queueIds.push(worker.workerId));
 
-async function start(): Promise<{ runner: Runner; heart: NodeJS.Timeout }> {
-  await beat(db, { id, queueIds });
-  const runner = await run({
-    pgPool: pool,
-    concurrency,
-    pollInterval: POLL_MS,
-    noHandleSignals: true,
-    events,
-    crontab: TIDY_UP,
-    logger: new Logger(() => (level, message, meta) => {
-      if (level !== 'debug' && level !== 'info') log[level === 'error' ? 'error' : 'warn'](meta ?? {}, message);
+/** A check job for each thread, so that none waits for one while its time runs; the other jobs beside them. */
+const startRunners = (): Promise<Runner[]> => {
+  const options = { pgPool: pool, pollInterval: POLL_MS, noHandleSignals: true, events, logger: queueLogger() };
+  const checkOrbit = checkOrbitJob({ desk, threads, log, stopping: stopping.signal });
+  return Promise.all([
+    run({ ...options, concurrency: config.workerThreads, taskList: { 'check-orbit': checkOrbit } }),
+    run({
+      ...options,
+      concurrency: OTHER_JOBS,
+      crontab: TIDY_UP,
+      taskList: { 'send-mail': sendMail(mailer), 'tidy-up': tidyUp(desk) },
     }),
-    taskList: {
-      'check-orbit': checkOrbitJob({ desk, threads, log, stopping: stopping.signal }),
-      'send-mail': sendMail(mailer),
-      'tidy-up': tidyUp(desk),
-    },
+  ]);
+};
+
+function queueLogger(): Logger {
+  // The names of the levels; the package does not export its enumeration.
+  const kept: readonly string[] = ['error', 'warning'];
+  return new Logger(() => (level, message, meta) => {
+    if (kept.includes(level)) log[level === kept[0] ? 'error' : 'warn'](meta ?? {}, message);
   });
+}
+
+interface Started {
+  runners: Runner[];
+  heart: NodeJS.Timeout;
+}
+
+async function start(): Promise<Started> {
+  await beat(db, { id, queueIds });
+  const runners = await startRunners();
   const live = (): Promise<unknown> => beat(db, { id, queueIds }).then(() => takeOverJobs(desk));
   await live();
   const heart = setInterval(() => {
     live().catch((error: unknown) => log.warn({ err: error }, 'heartbeat'));
   }, BEAT_EVERY_MS);
-  runner.promise.catch((error: unknown) => log.error({ err: error }, 'the queue ended'));
+  for (const { promise } of runners) {
+    promise.catch((error: unknown) => log.error({ err: error }, 'the queue ended'));
+  }
   log.info(`at work with ${config.workerThreads} threads`);
-  return { runner, heart };
+  return { runners, heart };
 }
 
-async function stop({ runner, heart }: Awaited<ReturnType<typeof start>>): Promise<void> {
+async function stop({ runners, heart }: Started): Promise<void> {
   log.info('stopping');
   setTimeout(() => process.exit(1), STOP_PATIENCE_MS).unref();
   const giveBack = setTimeout(() => stopping.abort(), FINISH_MS);
-  await runner.stop();
+  await Promise.all(runners.map((runner) => runner.stop()));
   clearTimeout(giveBack);
   clearInterval(heart);
   await leave(db, id);
-  await Promise.all([threads.destroy(), mailer.close(), db.close(), pool.end()]);
+  await Promise.all([threads.destroy(), tracer.close(), mailer.close(), checks.close(), db.close(), pool.end()]);
 }
 
 const started = start();
@@ -101,7 +120,7 @@ for (const signal of ['SIGINT', 'SIGTERM'] as const) {
   });
 }
 started
-  .then(() => installContent({ config, desk, tracer, log, signal: stopping.signal }))
+  .then(() => installContent({ config, desk, tracer, checks, log, signal: stopping.signal }))
   .catch((error: unknown) => {
     if (isStopping) return;
     log.fatal({ err: error }, 'the worker cannot go on');

@@ -2,9 +2,9 @@ import type { Problem } from '@/schemas/generated/contract';
 import { ApiError } from '@/features/api/api-error';
 
 /** Where the API lives, on the page's own origin. */
-export const API_ROOT = '/api/v1';
+const API_ROOT = '/api/v1';
 /** How long the client waits for an answer before it says so. */
-export const ANSWER_TIMEOUT_MS = 10_000;
+const ANSWER_TIMEOUT_MS = 10_000;
 
 type QueryValue = string | number | boolean | null | undefined;
 export type Query = Record<string, QueryValue | readonly string[]>;

@@ -5,7 +5,7 @@ import {
   useInfiniteQuery,
   useQuery,
 } from '@tanstack/react-query';
-import type { Entry, EntryRevision, OrbitPage, Trace } from '@/schemas/generated/contract';
+import type { Entry, EntryRevision, OrbitPage, System, Trace } from '@/schemas/generated/contract';
 import { apiAddress, getJson, type Query } from '@/features/api/client';
 
 /** What a catalogue search can ask for, under the names of the API. Every field is part of the cache key. */
@@ -19,6 +19,8 @@ export interface OrbitFilter {
   returns?: string;
   stability?: string;
   itinerary?: string;
+  /** Letters that stand in the itinerary. */
+  itineraryContains?: string;
   evidence?: string;
   text?: string;
   /** Coordinates, separated by commas. */
@@ -32,10 +34,12 @@ export type ExportFormat = 'json' | 'ndjson' | 'csv';
 const TRACE_POINTS = 2000;
 /** Results on one page of a search. */
 const PAGE_SIZE = 25;
+/** The most entries that the API gives in one answer. */
+const LARGEST_PAGE = 200;
 const SEARCH_FRESH_MS = 60_000;
 
 /** A filter as query parameters of the API. */
-export function filterQuery(filter: OrbitFilter): Query {
+function filterQuery(filter: OrbitFilter): Query {
   const { parameters = {}, ...rest } = filter;
   const named = Object.entries(parameters).map(([name, value]) => [`parameters[${name}]`, value] as const);
   return { ...rest, ...Object.fromEntries(named) };
@@ -91,6 +95,15 @@ export const orbitQueries = {
       staleTime: SEARCH_FRESH_MS,
     }),
 
+  /** As many entries as one answer holds, without incipits: for pictures of many. */
+  many: (filter: OrbitFilter) =>
+    queryOptions({
+      queryKey: [...root, 'many', filter] as const,
+      queryFn: ({ signal }) =>
+        getJson<OrbitPage>('/orbits', { query: { ...filterQuery(filter), limit: LARGEST_PAGE }, signal }),
+      staleTime: SEARCH_FRESH_MS,
+    }),
+
   /** A few entries, for a list inside a page. */
   few: (filter: OrbitFilter, limit: number) =>
     queryOptions({
@@ -102,7 +115,7 @@ export const orbitQueries = {
 };
 
 /** One entry, by its accession. */
-export const useOrbit = (accession: string) => useQuery(orbitQueries.one(accession));
+export const useOrbit = (accession: string, enabled = true) => useQuery({ ...orbitQueries.one(accession), enabled });
 
 /** The polyline of one entry. */
 export const useOrbitTrace = (accession: string) => useQuery(orbitQueries.trace(accession));
@@ -110,9 +123,20 @@ export const useOrbitTrace = (accession: string) => useQuery(orbitQueries.trace(
 export const useOrbitRevisions = (accession: string) => useQuery(orbitQueries.revisions(accession));
 
 /** The catalogue, page after page, under a filter; the former result stays while a new one is on its way. */
-export const useOrbitSearch = (filter: OrbitFilter) =>
-  useInfiniteQuery({ ...orbitQueries.search(filter), placeholderData: keepPreviousData });
+export const useOrbitSearch = (filter: OrbitFilter, enabled = true) =>
+  useInfiniteQuery({ ...orbitQueries.search(filter), placeholderData: keepPreviousData, enabled });
 
 /** A few entries under a filter; `enabled` holds it back until the filter is known. */
 export const useFewOrbits = (filter: OrbitFilter, limit: number, enabled = true) =>
   useQuery({ ...orbitQueries.few(filter, limit), enabled });
+
+/** As many entries as one answer holds, without incipits; `enabled` holds it back until the filter is known. */
+export const useEntriesOf = (filter: OrbitFilter, enabled = true) =>
+  useQuery({ ...orbitQueries.many(filter), enabled });
+
+/** The entries of a system with its own parameters, for a picture of their crossings. */
+export const useAllCrossings = ({ slug, document }: Pick<System, 'slug' | 'document'>) =>
+  useEntriesOf({
+    system: slug,
+    parameters: Object.fromEntries(document.parameters.map(({ name, value }) => [name, String(value)])),
+  });

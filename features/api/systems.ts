@@ -1,4 +1,4 @@
-import { queryOptions, useQuery } from '@tanstack/react-query';
+import { queryOptions, useQuery, useQueryClient } from '@tanstack/react-query';
 import type { System, SystemList } from '@/schemas/generated/contract';
 import { getJson } from '@/features/api/client';
 
@@ -27,5 +27,9 @@ export const systemQueries = {
 /** All systems. */
 export const useSystems = () => useQuery(systemQueries.all());
 
-/** One system, by its name in addresses. */
-export const useSystem = (slug: string) => useQuery(systemQueries.one(slug));
+/** One system, by its name in addresses; what the list says of it stands until its own answer is there. */
+export function useSystem(slug: string, enabled = true) {
+  const cache = useQueryClient();
+  const listed = () => cache.getQueryData(systemQueries.all().queryKey)?.items.find((system) => system.slug === slug);
+  return useQuery({ ...systemQueries.one(slug), enabled, placeholderData: listed });
+}

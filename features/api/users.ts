@@ -4,19 +4,33 @@ import { getJson, patchJson } from '@/features/api/client';
 
 const root = ['user'] as const;
 
-export const userQueries = {
+/** Accounts of one page: the list is short, and is searched here. */
+const PAGE_SIZE = 200;
+
+const userQueries = {
   root,
-  list: (text: string) =>
+  list: () =>
     infiniteQueryOptions({
-      queryKey: [...root, 'list', text] as const,
-      queryFn: ({ pageParam, signal }) => getJson<UserPage>('/users', { query: { text, after: pageParam }, signal }),
+      queryKey: [...root, 'list'] as const,
+      queryFn: ({ pageParam, signal }) =>
+        getJson<UserPage>('/users', { query: { limit: PAGE_SIZE, after: pageParam }, signal }),
       initialPageParam: '',
       getNextPageParam: (page) => page.next,
     }),
 };
 
-/** Accounts, page after page; administrators only. */
-export const useUsers = (text = '') => useInfiniteQuery(userQueries.list(text));
+const holds = (user: User, text: string): boolean =>
+  [user.name, user.email].some((part) => part.toLowerCase().includes(text.trim().toLowerCase()));
+
+/** Accounts, page after page, whose name or e-mail holds the words; administrators only. */
+export const useUsers = (text = '') =>
+  useInfiniteQuery({
+    ...userQueries.list(),
+    select: (data) => ({
+      ...data,
+      pages: data.pages.map((page) => ({ ...page, items: page.items.filter((user) => holds(user, text)) })),
+    }),
+  });
 
 /** Set an account's role. */
 export function useChangeUser() {

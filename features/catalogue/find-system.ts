@@ -1,4 +1,4 @@
-import Fuse from 'fuse.js';
+import type { FuseClass } from '@/features/ui';
 import type { SearchableSystem } from '@/features/catalogue/search-term';
 
 /** How far a word may be from a system's name: 0 is the same, 1 anything. */
@@ -10,10 +10,13 @@ const SHORTEST_PREFIX = 3;
 
 export type FindSystem = (words: string) => SearchableSystem | null;
 
-/** A finder of systems by name or slug, forgiving accents, hyphens, case and a slip of the finger. */
-export function createSystemFinder(systems: readonly SearchableSystem[]): FindSystem {
+/**
+ * A finder of systems by name or slug, forgiving accents, hyphens and case, and, once the fuzzy search is there, a
+ * slip of the finger.
+ */
+export function createSystemFinder(systems: readonly SearchableSystem[], fuzzy: FuseClass | null): FindSystem {
   const named = systems.map((system) => ({ system, names: [plain(system.name), plain(system.slug)] }));
-  const fuse = new Fuse(named, { keys: ['names'], threshold: FUZZINESS, includeScore: true });
+  const fuse = fuzzy && new fuzzy(named, { keys: ['names'], threshold: FUZZINESS, includeScore: true });
 
   return (words) => {
     const wanted = plain(words);
@@ -25,12 +28,12 @@ export function createSystemFinder(systems: readonly SearchableSystem[]): FindSy
       if (beginning.length > 1) return null;
     }
     if (wanted.length < SHORTEST_FUZZY) return null;
-    return fuse.search(wanted, { limit: 1 })[0]?.item.system ?? null;
+    return fuse?.search(wanted, { limit: 1 })[0]?.item.system ?? null;
   };
 }
 
 /** Small letters without accents; hyphens, dashes and dots become single spaces. */
-export const plain = (text: string): string =>
+const plain = (text: string): string =>
   text
     .normalize('NFD')
     .replace(/\p{M}/gu, '')

@@ -1,5 +1,6 @@
 import { createSystemFinder, type FindSystem } from '@/features/catalogue/find-system';
 import { scanSearchLine } from '@/features/catalogue/scan-search-line';
+import type { FuseClass } from '@/features/ui';
 import type { SearchableSystem, SearchTerm } from '@/features/catalogue/search-term';
 
 /** A system's name may be so many words long. */
@@ -7,9 +8,12 @@ const LONGEST_NAME = 5;
 
 export type ParseSearchLine = (text: string) => SearchTerm[];
 
-/** A parser that knows these systems. */
-export function createSearchParser(systems: readonly SearchableSystem[]): ParseSearchLine {
-  const find = createSystemFinder(systems);
+/** A parser that knows these systems; with fuzzy search it forgives slips in their names. */
+export function createSearchParser(
+  systems: readonly SearchableSystem[],
+  fuzzy: FuseClass | null = null,
+): ParseSearchLine {
+  const find = createSystemFinder(systems, fuzzy);
   return (text) => {
     const named = nameSystem(scanSearchLine(text, null), find);
     const term = named.find((one) => one.kind === 'system');

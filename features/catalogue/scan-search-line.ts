@@ -12,6 +12,8 @@ const SIZE = String.raw`\d+(?:\.\d*)?(?:e[+-]?\d+)?|\.\d+(?:e[+-]?\d+)?`;
 const NUMBER = String.raw`[+\-−]?(?:${SIZE})`;
 const TO = String.raw`\s*(?:\.\.|–|\bto\b)\s*`;
 const PERIOD = String.raw`(?:(?:period|T)\s*=?\s*)`;
+const STABLE = `(?:${STABILITIES.join('|')})`;
+const OR = String.raw`(?:\s*,\s*|\s+or\s+|\s+)`;
 const END = String.raw`(?=[\s,;)]|$)`;
 
 const rule = (source: string, read: Rule['read']): Rule => ({ pattern: new RegExp(source, 'iyu'), read });
@@ -25,8 +27,8 @@ const rules: Rule[] = [
   })),
   rule(String.raw`near\s*\(?\s*((?:${NUMBER})(?:[\s,]+(?:${NUMBER}))*)\s*\)?${END}`, readPoint),
   rule(String.raw`\(?\s*((?:${NUMBER})(?:\s*,\s*(?:${NUMBER}))+)\s*\)?${END}`, readPoint),
-  rule(String.raw`(\d+)\s*returns?${END}`, ([value]) => ({ kind: 'returns', value: value! })),
-  rule(String.raw`returns?\s*=?\s*(\d+)${END}`, ([value]) => ({ kind: 'returns', value: value! })),
+  rule(String.raw`(\d+)(?:${TO}(\d+))?\s*returns?${END}`, readReturns),
+  rule(String.raw`returns?\s*=?\s*(\d+)(?:${TO}(\d+))?${END}`, readReturns),
   rule(String.raw`(\p{L}[\p{L}\d_]*)\s*=?\s*(${NUMBER}|\d+\/\d+)${END}`, readParameter),
   rule(String.raw`(\p{L}[\p{L}\d_]*)\s*=?\s*([+\-−]?\d+\/\d+)${END}`, readParameter),
   rule(String.raw`${PERIOD}?(?:between\s+)?(${SIZE})(?:${TO}|\s+and\s+)(${SIZE})${END}`, ([min, max]) => ({
@@ -44,10 +46,18 @@ const rules: Rule[] = [
     min: null,
     max: max!,
   })),
+  rule(String.raw`(?:itinerary\s+)?contains\s*=?\s*([\p{L}\d]+)${END}`, ([value]) => ({
+    kind: 'contains',
+    value: value!,
+  })),
   rule(String.raw`itinerary\s*=?\s*([\p{L}\d]+)${END}`, ([value]) => ({ kind: 'itinerary', value: value! })),
   rule(String.raw`([\p{L}\d]+)${END}`, readItinerary),
   rule(String.raw`${PERIOD}?(${SIZE})${END}`, ([value]) => ({ kind: 'period', value: value! })),
-  rule(String.raw`([\p{L}-]+)${END}`, readClass),
+  rule(String.raw`(${STABLE}(?:${OR}${STABLE})*)${END}`, readStability),
+  rule(String.raw`(?:at\s+least\s+)?(${EVIDENCE_LEVELS.join('|')})${END}`, ([level]) => ({
+    kind: 'evidence',
+    value: level!.toLowerCase(),
+  })),
 ];
 
 const SEPARATORS = /[\s,;]+/y;
@@ -122,11 +132,13 @@ function readItinerary([run]: (string | undefined)[], system: SearchableSystem |
   return { kind: 'itinerary', value: run! };
 }
 
-function readClass([word]: (string | undefined)[]): Meaning | null {
-  const value = word!.toLowerCase();
-  if (STABILITIES.some((one) => one === value)) return { kind: 'stability', value };
-  if (EVIDENCE_LEVELS.some((one) => one === value)) return { kind: 'evidence', value };
-  return null;
+function readReturns([min, max]: (string | undefined)[]): Meaning {
+  return { kind: 'returns', min: min!, max: max ?? min! };
+}
+
+function readStability([words]: (string | undefined)[]): Meaning {
+  const typed = words!.toLowerCase().split(/[\s,]+/);
+  return { kind: 'stability', values: STABILITIES.filter((one) => typed.includes(one)) };
 }
 
 const GREEK: Record<string, string> = {

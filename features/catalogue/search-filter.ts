@@ -1,5 +1,5 @@
 import type { OrbitFilter } from '@/features/api/orbits';
-import type { SearchTerm } from '@/features/catalogue/search-term';
+import { EVIDENCE_LEVELS, type SearchTerm } from '@/features/catalogue/search-term';
 
 /** What the terms of a search line ask of the catalogue. */
 export function searchFilter(terms: readonly SearchTerm[], sort?: string): OrbitFilter {
@@ -22,13 +22,15 @@ function partOf(term: SearchTerm, before: OrbitFilter): OrbitFilter {
         ...(term.max === null ? {} : { periodMax: term.max }),
       };
     case 'returns':
-      return { returns: term.value };
+      return { returns: term.min === term.max ? term.min : `${term.min}..${term.max}` };
     case 'itinerary':
       return { itinerary: term.value };
+    case 'contains':
+      return { itineraryContains: term.value };
     case 'stability':
-      return { stability: term.value };
+      return { stability: term.values.join(',') };
     case 'evidence':
-      return { evidence: term.value };
+      return { evidence: levelsFrom(term.value).join(',') };
     case 'near':
       return { near: term.point.join(',') };
     case 'words':
@@ -37,3 +39,12 @@ function partOf(term: SearchTerm, before: OrbitFilter): OrbitFilter {
       return {};
   }
 }
+
+/** A level of evidence and every stronger one. */
+const levelsFrom = (least: string): string[] =>
+  EVIDENCE_LEVELS.slice(
+    Math.max(
+      0,
+      EVIDENCE_LEVELS.findIndex((level) => level === least),
+    ),
+  );

@@ -12,9 +12,13 @@ export type SearchTerm = Span &
     /** Every period that rounds to these digits. */
     | { kind: 'period'; value: string }
     | { kind: 'period-range'; min: string | null; max: string | null }
-    | { kind: 'returns'; value: string }
+    | { kind: 'returns'; min: string; max: string }
+    /** The whole itinerary, up to cyclic shift. */
     | { kind: 'itinerary'; value: string }
-    | { kind: 'stability'; value: string }
+    /** Letters that stand somewhere in the itinerary. */
+    | { kind: 'contains'; value: string }
+    | { kind: 'stability'; values: string[] }
+    /** The least level of evidence. */
     | { kind: 'evidence'; value: string }
     | { kind: 'near'; point: string[] }
     | { kind: 'accession'; value: string }

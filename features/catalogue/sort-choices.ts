@@ -1,5 +1,5 @@
 /** Orders of a result, by their names in the API. */
-export const sortChoices = [
+const sortChoices = [
   { value: 'period', label: 'period, rising' },
   { value: '-period', label: 'period, falling' },
   { value: 'returns', label: 'returns, rising' },

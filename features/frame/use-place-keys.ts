@@ -11,7 +11,7 @@ export function usePlaceKeys(): void {
   useEffect(() => {
     let begun = -Infinity;
     const onKey = (event: KeyboardEvent) => {
-      if (isTyping(event) || event.ctrlKey || event.metaKey || event.altKey) return;
+      if (event.key.length > 1 || isTyping(event) || event.ctrlKey || event.metaKey || event.altKey) return;
       const place = event.timeStamp - begun < PATIENCE_MS ? PLACES[event.key] : undefined;
       begun = event.key === 'g' ? event.timeStamp : -Infinity;
       if (!place) return;

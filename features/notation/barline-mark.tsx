@@ -1,4 +1,3 @@
-import { G, Path } from 'react-native-svg';
 import { colour } from '@/features/ui';
 import { dotPath } from './dot-path';
 import { type OrbitState, stateLook } from './orbit-state';
@@ -27,14 +26,14 @@ function RepeatDots({ x, top, bottom }: BarlineMarkProps) {
   const radius = Math.max(1.5, Math.min(3, gap * 0.24));
   const middle = (top + bottom) / 2;
   const at = [middle - gap / 2, middle + gap / 2].map((y) => dotPath(x - DOTS_FROM_EDGE, y, radius));
-  return <Path d={at.join('')} fill={colour.verdigris} />;
+  return <path d={at.join('')} fill={colour.verdigris} />;
 }
 
 function ThinThick({ x, top, bottom }: BarlineMarkProps) {
   return (
     <>
-      <Path d={`M${x - THIN_FROM_EDGE} ${top}V${bottom}`} stroke={colour.verdigris} strokeWidth={THIN} />
-      <Path d={`M${x - THICK / 2} ${top}V${bottom}`} stroke={colour.verdigris} strokeWidth={THICK} />
+      <path d={`M${x - THIN_FROM_EDGE} ${top}V${bottom}`} stroke={colour.verdigris} strokeWidth={THIN} />
+      <path d={`M${x - THICK / 2} ${top}V${bottom}`} stroke={colour.verdigris} strokeWidth={THICK} />
     </>
   );
 }
@@ -45,8 +44,8 @@ function Broken({ x, top, bottom }: BarlineMarkProps) {
   const cross = `M${at - CROSS} ${middle - CROSS}l${2 * CROSS} ${2 * CROSS}m0 ${-2 * CROSS}l${-2 * CROSS} ${2 * CROSS}`;
   return (
     <>
-      <Path d={`M${at} ${top}V${bottom}`} stroke={colour.oxide} strokeWidth={THIN} strokeDasharray={DASHES} />
-      <Path d={cross} stroke={colour.oxide} strokeWidth={1.8} fill="none" />
+      <path d={`M${at} ${top}V${bottom}`} stroke={colour.oxide} strokeWidth={THIN} strokeDasharray={DASHES} />
+      <path d={cross} stroke={colour.oxide} strokeWidth={1.8} fill="none" />
     </>
   );
 }
@@ -59,21 +58,21 @@ export function BarlineMark(props: BarlineMarkProps) {
     case 'none':
       return null;
     case 'dashed':
-      return <Path d={`M${edge} ${top}V${bottom}`} stroke={colour.muted} strokeWidth={THIN} strokeDasharray={DASHES} />;
+      return <path d={`M${edge} ${top}V${bottom}`} stroke={colour.muted} strokeWidth={THIN} strokeDasharray={DASHES} />;
     case 'thin':
-      return <Path d={`M${edge} ${top}V${bottom}`} stroke={colour.ochre} strokeWidth={THIN} />;
+      return <path d={`M${edge} ${top}V${bottom}`} stroke={colour.ochre} strokeWidth={THIN} />;
     case 'two-thin':
       return (
-        <Path d={`M${edge} ${top}V${bottom}M${edge - 4} ${top}V${bottom}`} stroke={colour.ochre} strokeWidth={THIN} />
+        <path d={`M${edge} ${top}V${bottom}M${edge - 4} ${top}V${bottom}`} stroke={colour.ochre} strokeWidth={THIN} />
       );
     case 'thin-thick':
       return <ThinThick {...props} />;
     case 'repeat':
       return (
-        <G {...(animate && { className: 'r-draw' })}>
+        <g {...(animate && { className: 'r-draw' })}>
           <ThinThick {...props} />
           <RepeatDots {...props} />
-        </G>
+        </g>
       );
     case 'broken':
       return <Broken {...props} />;

@@ -1,5 +1,4 @@
 import { View } from 'react-native';
-import Svg, { Path } from 'react-native-svg';
 import { colour, space, Text } from '@/features/ui';
 import { BarlineMark } from './barline-mark';
 import { type OrbitState, stateLook } from './orbit-state';
@@ -20,10 +19,10 @@ export function BarlineState({ state, lineGap = 8, width = 120, word }: BarlineS
   const lines = [0, 1, 2, 3, 4].map((i) => `M0 ${top + i * lineGap}H${width}`).join('');
   return (
     <View style={{ gap: space.half }}>
-      <Svg width={width} height={bottom + 2} aria-hidden>
-        <Path d={lines} stroke={colour.staff} strokeWidth={0.8} />
+      <svg width={width} height={bottom + 2} aria-hidden>
+        <path d={lines} stroke={colour.staff} strokeWidth={0.8} />
         <BarlineMark state={state} x={width} top={top} bottom={bottom} />
-      </Svg>
+      </svg>
       <Text size={14} tone={stateLook[state].tone}>
         {word ?? stateLook[state].word}
       </Text>

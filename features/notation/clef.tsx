@@ -1,4 +1,3 @@
-import Svg, { Circle, G, Path } from 'react-native-svg';
 import { colour } from '@/features/ui';
 import type { Multiplier } from './format-multiplier';
 import { dotPath } from './dot-path';
@@ -25,17 +24,17 @@ export function Clef({ multipliers, radius, x, y }: ClefProps) {
   const dot = Math.max(LEAST_DOT, radius * DOT);
   const dots = (multipliers ?? []).map(unitCirclePosition);
   return (
-    <G>
-      <Circle cx={x} cy={y} r={radius} fill="none" stroke={colour.ink} strokeWidth={STROKE} />
+    <g>
+      <circle cx={x} cy={y} r={radius} fill="none" stroke={colour.ink} strokeWidth={STROKE} />
       {multipliers ? (
-        <Path
+        <path
           d={`M${x + radius * (1 - TICK)} ${y}H${x + radius * (1 + TICK)}`}
           stroke={colour.ink}
           strokeWidth={STROKE}
         />
       ) : null}
-      <Path d={dots.map((p) => dotPath(x + p.x * radius, y - p.y * radius, dot)).join('')} fill={colour.ink} />
-    </G>
+      <path d={dots.map((p) => dotPath(x + p.x * radius, y - p.y * radius, dot)).join('')} fill={colour.ink} />
+    </g>
   );
 }
 
@@ -43,8 +42,8 @@ export function Clef({ multipliers, radius, x, y }: ClefProps) {
 export function SmallUnitCircle({ multipliers, radius }: Pick<ClefProps, 'multipliers' | 'radius'>) {
   const half = radius * 2.8;
   return (
-    <Svg width={2 * half} height={2 * radius + 8} aria-hidden>
+    <svg width={2 * half} height={2 * radius + 8} aria-hidden>
       <Clef multipliers={multipliers} radius={radius} x={half} y={radius + 4} />
-    </Svg>
+    </svg>
   );
 }

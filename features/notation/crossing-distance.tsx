@@ -1,5 +1,5 @@
+import { useState } from 'react';
 import { View } from 'react-native';
-import Svg, { Path } from 'react-native-svg';
 import { colour, series } from '@/features/ui';
 import { countWord } from './count-word';
 import { formatLimit } from './format-limit';
@@ -16,8 +16,8 @@ export interface CrossingDistanceProps {
   same: number;
   /** Crossings whose letters differ. */
   differs?: readonly number[];
-  /** px. */
-  width: number;
+  /** px, of the score above it; as wide as its container unless given. */
+  width?: number;
   /** As the score above it, so that the notes stand under its notes. */
   lineGap?: number;
 }
@@ -31,6 +31,8 @@ const NOTE = 9;
 /** Where the first note of an incipit stands, in staff spaces, and the room of its closing bar, px. */
 const FIRST_NOTE = 7.65;
 const BAR_ROOM = 22;
+/** The bracket of the score above, px. */
+const BRACKET = 12;
 
 interface Scale {
   x: (time: number) => number;
@@ -41,8 +43,9 @@ interface Scale {
   last: number;
 }
 
-function scaleOf({ period, distances, same, width, lineGap = 8 }: CrossingDistanceProps, logs: number[]): Scale {
-  const first = lineGap * FIRST_NOTE;
+function scaleOf(props: CrossingDistanceProps, width: number, logs: number[]): Scale {
+  const { period, distances, same, lineGap = 8 } = props;
+  const first = BRACKET + lineGap * FIRST_NOTE;
   const last = width - BAR_ROOM;
   const [high, low] = distances.length > 0 ? [Math.max(...logs), Math.min(...logs)] : [0, 0];
   const floor = Math.min(low, Math.log10(same));
@@ -69,7 +72,7 @@ function Ends({ scale: { y, high, low, first } }: { scale: Scale }) {
   const close = y(low) - y(high) < 14;
   return (
     <>
-      <Path d={`M${x + 4} ${y(high)}H${x}V${y(low)}H${x + 4}`} stroke={colour.staff} fill="none" />
+      <path d={`M${x + 4} ${y(high)}H${x}V${y(low)}H${x + 4}`} stroke={colour.staff} fill="none" />
       <SvgLabel x={x - 5} y={y(high) + (close ? -1 : 4)} anchor="end">
         {distanceText(10 ** high)}
       </SvgLabel>
@@ -80,29 +83,47 @@ function Ends({ scale: { y, high, low, first } }: { scale: Scale }) {
   );
 }
 
-/** How far apart two orbits are, crossing by crossing, on a log scale, with the level below which they are the same. */
-export function CrossingDistance(props: CrossingDistanceProps) {
-  const { times, distances, same, differs = [], width } = props;
+function wordsOf({ distances, same }: CrossingDistanceProps): string {
+  const [low, high] = [Math.min(...distances), Math.max(...distances)];
+  return (
+    `${countWord(distances.length)} distances from ${formatSize(low)} to ${formatSize(high)}; ` +
+    `the same orbit would lie below ${formatLimit(same)}`
+  );
+}
+
+function Drawing({ props, width }: { props: CrossingDistanceProps; width: number }) {
+  const { times, distances, same, differs = [] } = props;
   const logs = distances.map((distance) => Math.log10(Math.max(distance, LEAST)));
-  const scale = scaleOf(props, logs);
-  const { x, y, high, low, first, last } = scale;
+  const scale = scaleOf(props, width, logs);
+  const { x, y, first, last } = scale;
   const heads = (differ: boolean) =>
     logs.map((log, i) => (differs.includes(i) === differ ? noteheadPath(x(times[i] ?? 0), y(log), NOTE) : '')).join('');
   const level = y(Math.log10(same));
-  const words =
-    `${countWord(distances.length)} distances from ${formatSize(10 ** low)} to ${formatSize(10 ** high)}; ` +
-    `the same orbit would lie below ${formatLimit(same)}`;
   return (
-    <View role="img" aria-label={words}>
-      <Svg width={width} height={HEIGHT} aria-hidden>
-        <Ends scale={scale} />
-        <Path d={heads(false)} fill={colour.ink} />
-        <Path d={heads(true)} fill={colour.oxide} />
-        <Path d={`M${first} ${level}H${last}`} stroke={series[2]} strokeWidth={1.4} strokeDasharray="6 4" />
-        <SvgLabel x={last} y={level - 7} face="reading" size={14} anchor="end" paint={series[2]}>
-          {`the same orbit would lie below ${formatLimit(same)}`}
-        </SvgLabel>
-      </Svg>
+    <svg width={width} height={HEIGHT} aria-hidden>
+      <Ends scale={scale} />
+      <path d={heads(false)} fill={colour.ink} />
+      <path d={heads(true)} fill={colour.oxide} />
+      <path d={`M${first} ${level}H${last}`} stroke={series[2]} strokeWidth={1.4} strokeDasharray="6 4" />
+      <SvgLabel x={last} y={level - 7} face="reading" size={14} anchor="end" paint={series[2]}>
+        {`the same orbit would lie below ${formatLimit(same)}`}
+      </SvgLabel>
+    </svg>
+  );
+}
+
+/** How far apart two orbits are, crossing by crossing, on a log scale, with the level below which they are the same. */
+export function CrossingDistance(props: CrossingDistanceProps) {
+  const [measured, setMeasured] = useState<number | null>(null);
+  const width = props.width ?? measured;
+  return (
+    <View
+      role="img"
+      aria-label={wordsOf(props)}
+      style={{ minHeight: HEIGHT }}
+      onLayout={(event) => setMeasured(event.nativeEvent.layout.width)}
+    >
+      {width ? <Drawing props={props} width={width} /> : null}
     </View>
   );
 }

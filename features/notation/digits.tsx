@@ -20,6 +20,13 @@ export interface DigitsProps {
 const MOST_SHOWN = 34;
 /** Gap between groups of three; padding, so that a copied number has no spaces. */
 const GAP = '0.2em';
+/** Verified digits stand over it; nothing else on the site does. */
+const RULE = {
+  borderBottomWidth: 2,
+  borderBottomStyle: 'solid',
+  borderBottomColor: colour.verdigris,
+  paddingBottom: 1,
+} as const;
 
 function Run({ run, marked }: { run: DigitRun; marked: boolean }) {
   const isPale = marked && !run.verified;
@@ -29,7 +36,7 @@ function Run({ run, marked }: { run: DigitRun; marked: boolean }) {
         whiteSpace: 'nowrap',
         ...(run.gap && { paddingLeft: GAP }),
         ...(isPale && { color: colour.faint }),
-        ...(marked && run.verified && { borderBottom: `2px solid ${colour.verdigris}`, paddingBottom: 1 }),
+        ...(marked && run.verified && RULE),
       }}
     >
       {run.text}

@@ -1,5 +1,5 @@
 import { useMemo } from 'react';
-import { font, Text, type TextProps } from '@/features/ui';
+import { Text, type TextProps } from '@/features/ui';
 import { formulaTokens } from './formula-tokens';
 import { mathmlElements } from './mathml-elements';
 
@@ -16,9 +16,13 @@ function Displayed({ mathml, text, size = 19 }: FormulaProps & { mathml: string 
   if (drawn === null) return <Text mono>{text}</Text>;
   return (
     <div
+      className="r-math"
       role="math"
       aria-label={text}
-      style={{ fontFamily: font.reading, fontSize: size, overflowX: 'auto', maxWidth: '100%' }}
+      // A long equation scrolls in its own line, so the keyboard must reach it.
+      // eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- a scrolling region has to take focus
+      tabIndex={0}
+      style={{ fontSize: size }}
     >
       {drawn}
     </div>

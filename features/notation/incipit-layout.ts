@@ -3,7 +3,7 @@ import type { Drawable, IncipitProps } from './incipit-props';
 import { toDouble } from './to-double';
 
 /** Crossings drawn at most; of a longer orbit the opening is shown. */
-export const MOST_DRAWN = 32;
+const MOST_DRAWN = 32;
 /** In staff spaces. */
 const CLEF_COLUMN = 7;
 const MARGIN = 1.6;

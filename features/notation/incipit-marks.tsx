@@ -1,4 +1,3 @@
-import { G, Path } from 'react-native-svg';
 import { colour } from '@/features/ui';
 import type { IncipitLayout, PlacedNote } from './incipit-layout';
 import type { IncipitProps } from './incipit-props';
@@ -23,8 +22,8 @@ export function StaffMark({ layout, levels }: { layout: IncipitLayout; levels: r
   const lines = [0, 1, 2, 3, 4].map((i) => `M${left} ${top + i * space}H${right}`).join('');
   const every = space >= 12 ? 1 : 2;
   return (
-    <G>
-      <Path d={lines} stroke={colour.staff} strokeWidth={STAFF_STROKE} fill="none" />
+    <g>
+      <path d={lines} stroke={colour.staff} strokeWidth={STAFF_STROKE} fill="none" />
       {(levels ?? []).map((level, i) =>
         i % every === 0 ? (
           <SvgLabel key={level} x={left - 7} y={top + i * space + labelSize * 0.36} size={labelSize} anchor="end">
@@ -32,7 +31,7 @@ export function StaffMark({ layout, levels }: { layout: IncipitLayout; levels: r
           </SvgLabel>
         ) : null,
       )}
-    </G>
+    </g>
   );
 }
 
@@ -55,16 +54,16 @@ export function NotesMark({ layout }: { layout: IncipitLayout }) {
       .join('');
   const differing = heads(true);
   return (
-    <G>
-      <Path
+    <g>
+      <path
         d={notes.map((note) => stemPath(note, layout)).join('')}
         stroke={colour.ink}
         strokeWidth={space < 7 ? 1.2 : 1.4}
         fill="none"
       />
-      <Path d={heads(false)} fill={colour.ink} />
-      {differing ? <Path d={differing} fill={colour.oxide} /> : null}
-    </G>
+      <path d={heads(false)} fill={colour.ink} />
+      {differing ? <path d={differing} fill={colour.oxide} /> : null}
+    </g>
   );
 }
 
@@ -75,7 +74,7 @@ export function LettersMark({ layout }: { layout: IncipitLayout }) {
   const size = gap < SMALL_LETTERS_UNDER ? 11 : 13;
   const y = bottom + space * 1.6 + 15;
   return (
-    <G>
+    <g>
       {notes.map((note) =>
         note.letter === null ? null : (
           <SvgLabel
@@ -92,7 +91,7 @@ export function LettersMark({ layout }: { layout: IncipitLayout }) {
           </SvgLabel>
         ),
       )}
-    </G>
+    </g>
   );
 }
 
@@ -103,10 +102,10 @@ export function EndMark({ layout, end }: { layout: IncipitLayout; end: IncipitPr
   const x = layout.xOf(toDouble(end.time));
   const y = layout.yOf(toDouble(end.value));
   return (
-    <G>
-      <Path d={`M${first.x} ${first.y}H${x}`} stroke={colour.oxide} strokeWidth={1.4} strokeDasharray="2 2.6" />
-      <Path d={noteheadPath(x, y, layout.noteWidth)} fill={colour.page} stroke={colour.oxide} strokeWidth={1.8} />
-    </G>
+    <g>
+      <path d={`M${first.x} ${first.y}H${x}`} stroke={colour.oxide} strokeWidth={1.4} strokeDasharray="2 2.6" />
+      <path d={noteheadPath(x, y, layout.noteWidth)} fill={colour.page} stroke={colour.oxide} strokeWidth={1.8} />
+    </g>
   );
 }
 
@@ -117,14 +116,14 @@ export function CutMark({ layout, state }: { layout: IncipitLayout; state: Incip
   const middle = top + 2 * space;
   const { word, tone } = stateLook[state];
   return (
-    <G>
+    <g>
       <SvgLabel x={cut.x} y={middle - 2} face="reading">
         {cut.text}
       </SvgLabel>
       <SvgLabel x={cut.x} y={middle + 13} face="reading" paint={colour[tone]}>
         {word}
       </SvgLabel>
-    </G>
+    </g>
   );
 }
 
@@ -133,5 +132,5 @@ export function RingMark({ layout, selected }: { layout: IncipitLayout; selected
   const note = layout.notes.find(({ crossing }) => crossing === selected);
   if (!note) return null;
   const radius = layout.noteWidth / 2 + 4;
-  return <Path d={noteheadPath(note.x, note.y, 2 * radius)} fill="none" stroke={colour.indigo} strokeWidth={2} />;
+  return <path d={noteheadPath(note.x, note.y, 2 * radius)} fill="none" stroke={colour.indigo} strokeWidth={2} />;
 }

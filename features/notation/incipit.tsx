@@ -1,6 +1,5 @@
 import { type MouseEvent, type ReactNode, useState } from 'react';
 import { View } from 'react-native';
-import Svg, { Path } from 'react-native-svg';
 import { colour } from '@/features/ui';
 import { BarlineMark } from './barline-mark';
 import { Clef } from './clef';
@@ -19,7 +18,7 @@ function Drawing({ props, layout }: { props: IncipitProps; layout: IncipitLayout
   const { levels, levelLabels, showLetters, state, multipliers = null, end, selected, animate = false } = props;
   const { left, top, bottom, space, width, height } = layout;
   return (
-    <Svg width={width} height={height} aria-hidden>
+    <svg width={width} height={height} aria-hidden>
       <StaffMark layout={layout} levels={levelLabels ? levels : null} />
       <Clef
         multipliers={multipliers}
@@ -27,7 +26,7 @@ function Drawing({ props, layout }: { props: IncipitProps; layout: IncipitLayout
         x={left + CLEF_FROM_LEFT * space}
         y={(top + bottom) / 2}
       />
-      <Path d={incipitFlow(props, layout)} fill="none" stroke={colour.muted} strokeWidth={1} strokeLinejoin="round" />
+      <path d={incipitFlow(props, layout)} fill="none" stroke={colour.muted} strokeWidth={1} strokeLinejoin="round" />
       <NotesMark layout={layout} />
       {showLetters ? <LettersMark layout={layout} /> : null}
       <EndMark layout={layout} end={end} />
@@ -37,7 +36,7 @@ function Drawing({ props, layout }: { props: IncipitProps; layout: IncipitLayout
         <BarlineMark state={state} x={width} top={top - 0.4} bottom={bottom + 0.4} animate={animate} />
       )}
       <RingMark layout={layout} selected={selected} />
-    </Svg>
+    </svg>
   );
 }
 

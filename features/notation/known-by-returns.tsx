@@ -1,5 +1,4 @@
 import { View } from 'react-native';
-import Svg, { Path } from 'react-native-svg';
 import { colour, LinkText, Text } from '@/features/ui';
 import { formatCount } from './format-count';
 
@@ -36,12 +35,12 @@ function Line({ row, most, width }: { row: KnownByReturnsRow; most: number; widt
   const known = lengthOf(row.known, most, width);
   const y = ROW / 2;
   return (
-    <Svg width={width + 2} height={ROW} aria-hidden>
+    <svg width={width + 2} height={ROW} aria-hidden>
       {allowed > 0 ? (
-        <Path d={`M0 ${y}H${allowed}M${allowed} ${y - TICK}V${y + TICK}`} stroke={colour.staff} strokeWidth={1.2} />
+        <path d={`M0 ${y}H${allowed}M${allowed} ${y - TICK}V${y + TICK}`} stroke={colour.staff} strokeWidth={1.2} />
       ) : null}
-      {known > 0 ? <Path d={`M0 ${y}H${known}`} stroke={colour.verdigris} strokeWidth={3.2} /> : null}
-    </Svg>
+      {known > 0 ? <path d={`M0 ${y}H${known}`} stroke={colour.verdigris} strokeWidth={3.2} /> : null}
+    </svg>
   );
 }
 

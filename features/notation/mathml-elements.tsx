@@ -21,7 +21,8 @@ function attributesOf(element: Element): Record<string, string> {
 }
 
 function elementOf(node: Node, key: number): ReactNode {
-  if (node.nodeType === Node.TEXT_NODE) return node.textContent;
+  // A letter and its dot apart: the text face draws the dot over the letter, and has no letter with a dot of its own.
+  if (node.nodeType === Node.TEXT_NODE) return node.textContent?.normalize('NFD');
   if (!(node instanceof Element) || !ELEMENTS.has(node.localName)) return null;
   const children = [...node.childNodes].map(elementOf);
   return createElement(node.localName, { key, ...attributesOf(node) }, ...children);

@@ -1,7 +1,7 @@
 /** Tilt of a notehead, degrees, counter-clockwise. */
 const TILT = -20;
 /** Height of a notehead in widths. */
-export const NOTEHEAD_RATIO = 7.4 / 10.4;
+const NOTEHEAD_RATIO = 7.4 / 10.4;
 
 /** A tilted ellipse around (x, y), as a path. */
 export function noteheadPath(x: number, y: number, width: number): string {

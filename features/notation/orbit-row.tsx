@@ -8,7 +8,7 @@ import { ShortDigits } from './short-digits';
 import { shortItinerary } from './short-itinerary';
 
 /** Column widths in staff spaces; the incipit takes what is left. */
-const COLUMNS = { accession: 16, period: 21, itinerary: 13.5, multiplier: 9, evidence: 9.5 } as const;
+const COLUMNS = { accession: 16, period: 20, itinerary: 13.5, multiplier: 9, evidence: 11 } as const;
 const GAP = 20;
 
 const column = (name: keyof typeof COLUMNS): ViewStyle => ({ width: COLUMNS[name] * staffSpace, flexShrink: 0 });

@@ -1,6 +1,5 @@
 import { useState } from 'react';
 import { View } from 'react-native';
-import Svg, { Path } from 'react-native-svg';
 import { colour, Text } from '@/features/ui';
 import { toDouble } from './to-double';
 
@@ -72,12 +71,12 @@ function Picture({
 }) {
   const x = (part: number) => (part * width).toFixed(1);
   return (
-    <Svg width={width} height={HEIGHT} aria-hidden style={{ overflow: 'visible' }}>
-      <Path d={strokes(counts, width, (i) => !isIn(i))} stroke={colour.staff} strokeWidth={1.4} />
-      <Path d={strokes(counts, width, isIn)} stroke={colour.verdigris} strokeWidth={2.6} />
-      <Path d={`M0.5 ${BASE + 4}V${BASE}H${width - 0.5}V${BASE + 4}`} stroke={colour.staff} fill="none" />
-      <Path d={`M${x(ends[0])} ${BASE}H${x(ends[1])}`} stroke={colour.verdigris} strokeWidth={2.6} />
-    </Svg>
+    <svg width={width} height={HEIGHT} aria-hidden style={{ overflow: 'visible' }}>
+      <path d={strokes(counts, width, (i) => !isIn(i))} stroke={colour.staff} strokeWidth={1.4} />
+      <path d={strokes(counts, width, isIn)} stroke={colour.verdigris} strokeWidth={2.6} />
+      <path d={`M0.5 ${BASE + 4}V${BASE}H${width - 0.5}V${BASE + 4}`} stroke={colour.staff} fill="none" />
+      <path d={`M${x(ends[0])} ${BASE}H${x(ends[1])}`} stroke={colour.verdigris} strokeWidth={2.6} />
+    </svg>
   );
 }
 

@@ -1,4 +1,3 @@
-import Svg, { Path } from 'react-native-svg';
 import { colour } from '@/features/ui';
 
 export type Severity = 'blocker' | 'warning' | 'note';
@@ -10,9 +9,9 @@ const STROKE = 1.4;
 export function SeverityMark({ severity }: { severity: Severity }) {
   const paint = { blocker: colour.oxide, warning: colour.ochre, note: colour.muted }[severity];
   return (
-    <Svg width={14} height={14} viewBox="0 0 14 14" aria-hidden>
-      <Path d={DIAMOND} fill={severity === 'blocker' ? paint : 'none'} stroke={paint} strokeWidth={STROKE} />
-      {severity === 'warning' ? <Path d="M7 1L1 7L7 13Z" fill={paint} /> : null}
-    </Svg>
+    <svg width={14} height={14} viewBox="0 0 14 14" aria-hidden>
+      <path d={DIAMOND} fill={severity === 'blocker' ? paint : 'none'} stroke={paint} strokeWidth={STROKE} />
+      {severity === 'warning' ? <path d="M7 1L1 7L7 13Z" fill={paint} /> : null}
+    </svg>
   );
 }

@@ -1,4 +1,3 @@
-import { G, Path } from 'react-native-svg';
 import { colour } from '@/features/ui';
 import { noteheadPath } from '@/features/notation/notehead-path';
 import { SvgLabel } from '@/features/notation/svg-label';
@@ -31,8 +30,8 @@ export function CrossingMarks({ marks, selected = null, width, height, numbered 
     chosen !== undefined && mark !== undefined && Math.hypot(mark.x - chosen.x, mark.y - chosen.y) < NEAR;
   const shown = labels.filter(({ index }) => !isNearChosen(marks[index]));
   return (
-    <G>
-      <Path
+    <g>
+      <path
         d={marks.map(({ x, y }) => noteheadPath(x, y, size)).join('')}
         fill={colour.ink}
         stroke={colour.page}
@@ -44,8 +43,8 @@ export function CrossingMarks({ marks, selected = null, width, height, numbered 
         </SvgLabel>
       ))}
       {chosen && selected !== null ? (
-        <G>
-          <Path d={noteheadPath(chosen.x, chosen.y, RING)} fill="none" stroke={colour.indigo} strokeWidth={2} />
+        <g>
+          <path d={noteheadPath(chosen.x, chosen.y, RING)} fill="none" stroke={colour.indigo} strokeWidth={2} />
           <SvgLabel
             x={chosen.x + 15}
             y={chosen.y - 12}
@@ -56,8 +55,8 @@ export function CrossingMarks({ marks, selected = null, width, height, numbered 
           >
             {selected + 1}
           </SvgLabel>
-        </G>
+        </g>
       ) : null}
-    </G>
+    </g>
   );
 }

@@ -6,75 +6,90 @@ export interface PlaneBox {
   y: readonly [number, number];
 }
 
-type Segment = readonly [PlanePoint, PlanePoint];
+/** Where the zero line meets an edge of the grid; the edge's name is exact where coordinates are rounded. */
+interface Meeting {
+  edge: string;
+  point: PlanePoint;
+}
 
-const zeroBetween = (a: number, b: number): number => a / (a - b);
+type Segment = readonly [Meeting, Meeting];
 
-/** Where the zero line enters and leaves one cell, by linear interpolation on its edges. */
-function cellSegments(
-  corners: readonly [number, number, number, number],
-  x: readonly [number, number],
-  y: readonly [number, number],
-): Segment[] {
-  const [southWest, southEast, northEast, northWest] = corners;
-  const across = (from: number, to: number) => x[0] + zeroBetween(from, to) * (x[1] - x[0]);
-  const up = (from: number, to: number) => y[0] + zeroBetween(from, to) * (y[1] - y[0]);
-  const differ = (a: number, b: number) => a < 0 !== b < 0;
-  const points: PlanePoint[] = [];
-  if (differ(southWest, southEast)) points.push([across(southWest, southEast), y[0]]);
-  if (differ(southEast, northEast)) points.push([x[1], up(southEast, northEast)]);
-  if (differ(northWest, northEast)) points.push([across(northWest, northEast), y[1]]);
-  if (differ(southWest, northWest)) points.push([x[0], up(southWest, northWest)]);
-  const [a, b, c, d] = points;
+/** Values of a function on a grid: `values[j][i]` at (x[i], y[j]). */
+interface Grid {
+  x: number[];
+  y: number[];
+  values: Float64Array[];
+}
+
+function gridOf(f: (x: number, y: number) => number, box: PlaneBox, cells: number): Grid {
+  const steps = (range: readonly [number, number]) =>
+    Array.from({ length: cells + 1 }, (_, i) => range[0] + ((range[1] - range[0]) * i) / cells);
+  const [x, y] = [steps(box.x), steps(box.y)];
+  return { x, y, values: y.map((b) => Float64Array.from(x, (a) => f(a, b))) };
+}
+
+/** Where f = 0 between grid points (i, j) and (k, l), by linear interpolation; null when the sign is the same. */
+function meeting(
+  { x, y, values }: Grid,
+  [i, j]: readonly [number, number],
+  [k, l]: readonly [number, number],
+): Meeting | null {
+  const [a, b] = [values[j]?.[i] ?? NaN, values[l]?.[k] ?? NaN];
+  if (!Number.isFinite(a) || !Number.isFinite(b) || a < 0 === b < 0) return null;
+  const part = a / (a - b);
+  const between = (from = 0, to = 0) => from + part * (to - from);
+  return { edge: `${i},${j},${k},${l}`, point: [between(x[i], x[k]), between(y[j], y[l])] };
+}
+
+function cellSegments(grid: Grid, i: number, j: number): Segment[] {
+  const meetings = [
+    meeting(grid, [i, j], [i + 1, j]),
+    meeting(grid, [i + 1, j], [i + 1, j + 1]),
+    meeting(grid, [i, j + 1], [i + 1, j + 1]),
+    meeting(grid, [i, j], [i, j + 1]),
+  ].filter((found) => found !== null);
+  const [a, b, c, d] = meetings;
   if (a && b && c && d)
     return [
       [a, b],
       [c, d],
     ];
-  return a && b ? [[a, b]] : [];
+  return a && b && !c ? [[a, b]] : [];
 }
 
-const key = ([x, y]: PlanePoint): string => `${x.toPrecision(9)},${y.toPrecision(9)}`;
-
-/** Join segments that share an end into lines. */
+/** Join segments that meet the same edge into lines. */
 function joined(segments: readonly Segment[]): PlanePoint[][] {
-  const byEnd = new Map<string, Segment[]>();
+  const byEdge = new Map<string, Segment[]>();
   for (const segment of segments) {
-    for (const end of segment) byEnd.set(key(end), [...(byEnd.get(key(end)) ?? []), segment]);
+    for (const { edge } of segment) byEdge.set(edge, [...(byEdge.get(edge) ?? []), segment]);
   }
   const used = new Set<Segment>();
-  const follow = (from: PlanePoint): PlanePoint[] => {
+  const follow = (from: Meeting): PlanePoint[] => {
     const line: PlanePoint[] = [];
     let at = from;
     for (;;) {
-      const next = byEnd.get(key(at))?.find((segment) => !used.has(segment));
+      const next = byEdge.get(at.edge)?.find((segment) => !used.has(segment));
       if (!next) return line;
       used.add(next);
-      at = key(next[0]) === key(at) ? next[1] : next[0];
-      line.push(at);
+      at = next[0].edge === at.edge ? next[1] : next[0];
+      line.push(at.point);
     }
   };
   return segments.flatMap((segment) => {
     if (used.has(segment)) return [];
     used.add(segment);
-    return [[...follow(segment[0]).reverse(), segment[0], segment[1], ...follow(segment[1])]];
+    const [first, last] = segment;
+    const before = follow(first).reverse();
+    return [[...before, first.point, last.point, ...follow(last)]];
   });
 }
 
 /** The lines on which f(x, y) = 0 in a box, found on a grid of `cells` × `cells` (marching squares). */
 export function levelLines(f: (x: number, y: number) => number, box: PlaneBox, cells = 80): PlanePoint[][] {
-  const at = (range: readonly [number, number], i: number) => range[0] + ((range[1] - range[0]) * i) / cells;
-  const values = Array.from({ length: cells + 1 }, (_, j) =>
-    Float64Array.from({ length: cells + 1 }, (_unused, i) => f(at(box.x, i), at(box.y, j))),
-  );
+  const grid = gridOf(f, box, cells);
   const segments: Segment[] = [];
   for (let j = 0; j < cells; j += 1) {
-    for (let i = 0; i < cells; i += 1) {
-      const [low, high] = [values[j], values[j + 1]];
-      const corners = [low?.[i] ?? NaN, low?.[i + 1] ?? NaN, high?.[i + 1] ?? NaN, high?.[i] ?? NaN] as const;
-      if (corners.some((value) => !Number.isFinite(value))) continue;
-      segments.push(...cellSegments(corners, [at(box.x, i), at(box.x, i + 1)], [at(box.y, j), at(box.y, j + 1)]));
-    }
+    for (let i = 0; i < cells; i += 1) segments.push(...cellSegments(grid, i, j));
   }
   return joined(segments);
 }

@@ -1,7 +1,7 @@
-import { G, Path } from 'react-native-svg';
 import { countWord } from '@/features/notation/count-word';
 import { SvgLabel } from '@/features/notation/svg-label';
 import { colour, series } from '@/features/ui';
+import { mathName } from '@/features/notation/math-name';
 import type { Trace } from '@/schemas/generated/contract';
 import { CrossingMarks } from './crossing-marks';
 import { extremeText } from './extreme-text';
@@ -54,34 +54,35 @@ function arrowPath(points: readonly (readonly [number, number])[]): string {
 function SectionLine({
   frame,
   section,
-  names,
+  drawn,
 }: {
   frame: PlotFrame;
   section: OrbitPlotProps['section'];
-  names: readonly string[];
+  /** Names of the two coordinates, as the system has them. */
+  drawn: readonly (string | undefined)[];
 }) {
   if (!section) return null;
   const { left, right, top, bottom, x, y } = frame;
   const { variable, level } = section;
   const stroke = { stroke: series[2], strokeWidth: 1.4, strokeDasharray: '6 4' };
-  if (variable === names[1]) {
+  if (variable === drawn[1]) {
     return (
-      <G>
-        <Path d={`M${left} ${y(level)}H${right}`} {...stroke} />
+      <g>
+        <path d={`M${left} ${y(level)}H${right}`} {...stroke} />
         <SvgLabel x={left - 22} y={y(level) + 21} face="reading" size={13} anchor="end" paint={series[2]}>
           section
         </SvgLabel>
-      </G>
+      </g>
     );
   }
-  if (variable !== names[0]) return null;
+  if (variable !== drawn[0]) return null;
   return (
-    <G>
-      <Path d={`M${x(level)} ${top}V${bottom}`} {...stroke} />
+    <g>
+      <path d={`M${x(level)} ${top}V${bottom}`} {...stroke} />
       <SvgLabel x={x(level)} y={top - 8} face="reading" size={13} anchor="middle" paint={series[2]} halo={colour.page}>
         section
       </SvgLabel>
-    </G>
+    </g>
   );
 }
 
@@ -96,8 +97,8 @@ function Triad({ turn, names, height }: { turn: Turn; names: readonly [string, s
   ).map((unit) => seenFrom(turn, unit));
   const [x, y, length] = [44, height - 40, 26];
   return (
-    <G>
-      <Path
+    <g>
+      <path
         d={ends.map((e) => `M${x} ${y}L${x + e[0] * length} ${y - e[1] * length}`).join('')}
         stroke={colour.staff}
       />
@@ -114,7 +115,7 @@ function Triad({ turn, names, height }: { turn: Turn; names: readonly [string, s
           {names[i]}
         </SvgLabel>
       ))}
-    </G>
+    </g>
   );
 }
 
@@ -143,8 +144,9 @@ export function OrbitPlot(props: OrbitPlotProps) {
   });
   const points = projected.map(([x, y]) => [frame.x(x), frame.y(y)] as const);
   const marks = crossings.map(({ point }) => project(props)(point)).map(([x, y]) => ({ x: frame.x(x), y: frame.y(y) }));
-  const name = (index: number) => trace.variables[index] ?? '';
+  const name = (index: number) => mathName(trace.variables[index] ?? '');
   const names = [name(axes[0]), name(axes[1]), depth === null ? '' : name(depth)] as const;
+  const drawn = [trace.variables[axes[0]], trace.variables[axes[1]]] as const;
   const levels = section ? [0, section.level] : [0];
   const words =
     `One period projected on ${names[0]} and ${names[1]}: ${names[0]} from ${extremeText(frame.xRange[0])} to ${extremeText(frame.xRange[1])}, ` +
@@ -162,13 +164,13 @@ export function OrbitPlot(props: OrbitPlotProps) {
           frame={frame}
           xName={names[0]}
           yName={names[1]}
-          xTicks={section?.variable === names[0] ? levels : [0]}
-          yTicks={section?.variable === names[1] ? [section.level] : [0]}
+          xTicks={section?.variable === drawn[0] ? levels : [0]}
+          yTicks={section && section.variable === drawn[1] ? [section.level] : [0]}
         />
       )}
-      <Path d={polylinePath(points)} fill="none" stroke={series[0]} strokeWidth={LINE} strokeLinejoin="round" />
-      <Path d={arrowPath(points)} fill={series[0]} />
-      {isTurned ? null : <SectionLine frame={frame} section={section} names={names} />}
+      <path d={polylinePath(points)} fill="none" stroke={series[0]} strokeWidth={LINE} strokeLinejoin="round" />
+      <path d={arrowPath(points)} fill={series[0]} />
+      {isTurned ? null : <SectionLine frame={frame} section={section} drawn={drawn} />}
       <CrossingMarks {...{ marks, selected, width, height }} />
     </PlotPicture>
   );

@@ -1,6 +1,5 @@
 import type { ReactNode } from 'react';
 import { View } from 'react-native';
-import Svg from 'react-native-svg';
 import { CrossingWalk } from '@/features/notation/crossing-walk';
 import { pressedCrossing } from './pressed-crossing';
 
@@ -21,9 +20,9 @@ export interface PlotPictureProps {
 export function PlotPicture(props: PlotPictureProps) {
   const { width, height, words, marks, selected = null, onSelect, valueText, children } = props;
   const picture = (
-    <Svg width={width} height={height} aria-hidden>
+    <svg width={width} height={height} aria-hidden>
       {children}
-    </Svg>
+    </svg>
   );
   if (!onSelect || marks.length === 0) {
     return (

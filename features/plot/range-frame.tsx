@@ -1,4 +1,3 @@
-import { G, Path } from 'react-native-svg';
 import { colour } from '@/features/ui';
 import { SvgLabel } from '@/features/notation/svg-label';
 import { extremeText } from './extreme-text';
@@ -36,8 +35,8 @@ function YAxis({ frame, yName, yTicks = [] }: RangeFrameProps) {
   const ticks = inside(yTicks, y, [top, bottom], CLOSE);
   const marks = ticks.map((tick) => `M${axis - TICK} ${y(tick)}H${axis}`).join('');
   return (
-    <G>
-      <Path d={`M${axis - TICK} ${top}H${axis}V${bottom}H${axis - TICK}${marks}`} stroke={colour.staff} fill="none" />
+    <g>
+      <path d={`M${axis - TICK} ${top}H${axis}V${bottom}H${axis - TICK}${marks}`} stroke={colour.staff} fill="none" />
       {[yRange[1], ...ticks, yRange[0]].map((value, i) => (
         <SvgLabel key={i} x={axis - TICK - 4} y={y(value) + 4.5} anchor="end">
           {extremeText(value)}
@@ -46,7 +45,7 @@ function YAxis({ frame, yName, yTicks = [] }: RangeFrameProps) {
       <SvgLabel x={axis} y={top - 10} size={16} face="readingItalic" paint={colour.ink} anchor="middle">
         {yName}
       </SvgLabel>
-    </G>
+    </g>
   );
 }
 
@@ -57,8 +56,8 @@ function XAxis({ frame, xName, xTicks = [] }: RangeFrameProps) {
   const marks = ticks.map((tick) => `M${x(tick)} ${axis}V${axis + TICK}`).join('');
   const narrow = right - left < 90;
   return (
-    <G>
-      <Path d={`M${left} ${axis + TICK}V${axis}H${right}V${axis + TICK}${marks}`} stroke={colour.staff} fill="none" />
+    <g>
+      <path d={`M${left} ${axis + TICK}V${axis}H${right}V${axis + TICK}${marks}`} stroke={colour.staff} fill="none" />
       <SvgLabel x={left} y={axis + TICK + 14} anchor={narrow ? 'end' : 'middle'}>
         {extremeText(xRange[0])}
       </SvgLabel>
@@ -73,16 +72,16 @@ function XAxis({ frame, xName, xTicks = [] }: RangeFrameProps) {
       <SvgLabel x={right + 18} y={axis + 5} size={16} face="readingItalic" paint={colour.ink} anchor="middle">
         {xName}
       </SvgLabel>
-    </G>
+    </g>
   );
 }
 
 /** Axes that span the data only: their end labels are the extremes. */
 export function RangeFrame(props: RangeFrameProps) {
   return (
-    <G>
+    <g>
       <YAxis {...props} />
       <XAxis {...props} />
-    </G>
+    </g>
   );
 }

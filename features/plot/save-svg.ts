@@ -17,7 +17,7 @@ function resolvePaint(original: Element, copy: Element): void {
 }
 
 /** The text of an SVG file of a picture, on the page's ground. */
-export function svgText(picture: SVGSVGElement): string {
+function svgText(picture: SVGSVGElement): string {
   const copy = picture.cloneNode(true) as SVGSVGElement;
   resolvePaint(picture, copy);
   copy.setAttribute('xmlns', 'http://www.w3.org/2000/svg');

@@ -1,4 +1,3 @@
-import { G, Path } from 'react-native-svg';
 import { countWord } from '@/features/notation/count-word';
 import { dotPath } from '@/features/notation/dot-path';
 import { SvgLabel } from '@/features/notation/svg-label';
@@ -38,15 +37,15 @@ const widened = ([low, high]: [number, number]): [number, number] => {
 
 function Neighbours({ frame, known }: { frame: PlotFrame; known: readonly PlanePoint[] }) {
   const dots = known.map(([x, y]) => dotPath(frame.x(x), frame.y(y), 0.9)).join('');
-  return <Path d={dots} fill={colour.staff} />;
+  return <path d={dots} fill={colour.staff} />;
 }
 
 function Tangency({ frame, lines }: { frame: PlotFrame; lines: readonly (readonly PlanePoint[])[] }) {
   const path = lines.map((line) => polylinePath(line.map(([x, y]) => [frame.x(x), frame.y(y)] as const))).join('');
   const first = lines[0]?.[0];
   return (
-    <G>
-      <Path d={path} fill="none" stroke={series[2]} strokeWidth={1.4} strokeDasharray="6 4" />
+    <g>
+      <path d={path} fill="none" stroke={series[2]} strokeWidth={1.4} strokeDasharray="6 4" />
       {first ? (
         <SvgLabel
           x={frame.x(first[0]) - 6}
@@ -59,7 +58,7 @@ function Tangency({ frame, lines }: { frame: PlotFrame; lines: readonly (readonl
           tangency
         </SvgLabel>
       ) : null}
-    </G>
+    </g>
   );
 }
 

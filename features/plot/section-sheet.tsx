@@ -1,6 +1,5 @@
 import { useMemo } from 'react';
 import { View } from 'react-native';
-import Svg, { G, Path } from 'react-native-svg';
 import { dotPath } from '@/features/notation/dot-path';
 import { formatCount } from '@/features/notation/format-count';
 import { SvgLabel } from '@/features/notation/svg-label';
@@ -133,8 +132,8 @@ function Tangency({ frame, lines }: { frame: PlotFrame; lines: readonly (readonl
   const longest = [...lines].sort((a, b) => b.length - a.length)[0];
   const at = longest?.[Math.floor(longest.length / 2)];
   return (
-    <G>
-      <Path
+    <g>
+      <path
         d={lines.map((line) => polylinePath(line.map(([x, y]) => [frame.x(x), frame.y(y)] as const))).join('')}
         fill="none"
         stroke={series[2]}
@@ -153,7 +152,7 @@ function Tangency({ frame, lines }: { frame: PlotFrame; lines: readonly (readonl
           tangency
         </SvgLabel>
       ) : null}
-    </G>
+    </g>
   );
 }
 
@@ -170,7 +169,7 @@ export function SectionSheet(props: SectionSheetProps) {
   };
   return (
     <View role="img" aria-label={words}>
-      <Svg
+      <svg
         width={width}
         height={height}
         aria-hidden
@@ -179,10 +178,10 @@ export function SectionSheet(props: SectionSheetProps) {
             press(event.nativeEvent.offsetX, event.nativeEvent.offsetY),
         })}
       >
-        {field ? <Path d={field.dash} stroke={colour.staff} strokeWidth={1} /> : null}
-        {field ? <Path d={field.plus} stroke={series[0]} strokeWidth={1.2} /> : null}
+        {field ? <path d={field.dash} stroke={colour.staff} strokeWidth={1} /> : null}
+        {field ? <path d={field.plus} stroke={series[0]} strokeWidth={1.2} /> : null}
         <Tangency frame={frame} lines={lines} />
-        <Path d={dots} fill={colour.ink} />
+        <path d={dots} fill={colour.ink} />
         <RangeFrame frame={sheetFrame(frame)} xName={names[0]} yName={names[1]} />
         {letters.map(({ letter, x, y }) => (
           <SvgLabel
@@ -197,7 +196,7 @@ export function SectionSheet(props: SectionSheetProps) {
             {letter}
           </SvgLabel>
         ))}
-      </Svg>
+      </svg>
     </View>
   );
 }

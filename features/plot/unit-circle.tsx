@@ -1,5 +1,4 @@
 import { View } from 'react-native';
-import Svg, { Circle, G, Path } from 'react-native-svg';
 import { dotPath } from '@/features/notation/dot-path';
 import { type Multiplier, multiplierSize } from '@/features/notation/format-multiplier';
 import { SvgLabel } from '@/features/notation/svg-label';
@@ -59,7 +58,7 @@ function RealLabels({ placed }: { placed: readonly Placed[] }) {
     const isAfterClose = i % 2 === 1 && x - (sorted[i - 1]?.x ?? -Infinity) < CLOSE;
     const isBeforeClose = i % 2 === 0 && (sorted[i + 1]?.x ?? Infinity) - x < CLOSE;
     return (
-      <G key={i}>
+      <g key={i}>
         <SvgLabel x={x} y={isAfterClose ? y + 21 : y - 12} anchor="middle" paint={colour.ink} halo={colour.page}>
           {multiplierText(multiplier)}
         </SvgLabel>
@@ -68,7 +67,7 @@ function RealLabels({ placed }: { placed: readonly Placed[] }) {
             {sideOf(multiplier)}
           </SvgLabel>
         )}
-      </G>
+      </g>
     );
   });
 }
@@ -77,14 +76,14 @@ function Labels({ placed, centre }: { placed: readonly Placed[]; centre: number 
   const labelled = placed.slice(0, LABELLED);
   const isReal = ({ multiplier }: Placed) => toDouble(multiplier.im) === 0;
   return (
-    <G>
+    <g>
       <RealLabels placed={labelled.filter(isReal)} />
       {labelled
         .filter((one) => !isReal(one))
         .map((one, i) => (
           <ComplexLabel key={i} placed={one} centre={centre} />
         ))}
-    </G>
+    </g>
   );
 }
 
@@ -105,16 +104,16 @@ export function UnitCircle({ multipliers, width, height }: UnitCircleProps) {
     : 'multipliers are not known';
   return (
     <View role="img" aria-label={words}>
-      <Svg width={width} height={height} aria-hidden>
-        <Path d={`M8 ${y}H${width - 8}`} stroke={colour.staff} />
-        <Circle cx={x} cy={y} r={scale} fill="none" stroke={colour.ink} strokeWidth={1.6} />
-        {multipliers ? <Path d={`M${x + scale - 5} ${y}h10`} stroke={colour.ink} strokeWidth={2.4} /> : null}
-        <Path d={placed.map((p) => dotPath(p.x, p.y, 4)).join('')} fill={colour.ink} />
+      <svg width={width} height={height} aria-hidden>
+        <path d={`M8 ${y}H${width - 8}`} stroke={colour.staff} />
+        <circle cx={x} cy={y} r={scale} fill="none" stroke={colour.ink} strokeWidth={1.6} />
+        {multipliers ? <path d={`M${x + scale - 5} ${y}h10`} stroke={colour.ink} strokeWidth={2.4} /> : null}
+        <path d={placed.map((p) => dotPath(p.x, p.y, 4)).join('')} fill={colour.ink} />
         <SvgLabel x={x} y={y + scale + 16} anchor="middle" halo={colour.page}>
           |μ| = 1
         </SvgLabel>
         <Labels placed={placed} centre={x} />
-      </Svg>
+      </svg>
     </View>
   );
 }

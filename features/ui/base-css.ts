@@ -19,6 +19,13 @@ body { overflow-x: clip; }
 #root { display: flex; flex-direction: column; height: auto; min-height: 100vh; min-height: 100dvh; }
 html { scroll-padding: 80px 0 136px; }
 * { font-synthesis: none; }
+svg { display: block; flex: none; }
+.r-math { max-width: 100%; overflow-x: auto; font-family: var(--reading); padding: 4px 0 4px 8px; }
+.r-math math { display: block math; width: max-content; margin: 0; font-family: var(--reading); }
+.r-math mi { font-family: var(--italic); text-transform: none; }
+.r-math mtd { padding: 3px 4px; text-align: center; }
+.r-math mtd:first-child { padding-left: 0; text-align: right; }
+.r-math mtd:last-child { text-align: left; }
 ::selection { background: var(--verdigris); color: var(--page); }
 :root :focus { outline: none; }
 :root :focus-visible { outline: 2px solid var(--indigo); outline-offset: 2px; border-radius: 3px; }

@@ -4,6 +4,8 @@ export const frameCss = `
 .r-masthead-places { display: flex; gap: clamp(20px, 3vw, 40px); }
 .r-top { background: var(--page); }
 .r-anchor { position: relative; display: inline-flex; }
+/* Every box around an open popover rises above what follows it. */
+:root div:has(.r-popover) { z-index: 30; }
 .r-words-button { min-height: 44px; min-width: 44px; margin: 0; padding: 0; border: 0; background: none; color: var(--ink-muted);
   font-family: var(--reading); font-size: 16px; line-height: 24px; cursor: pointer; white-space: nowrap; }
 .r-words-button:hover { color: var(--ink); }
@@ -26,6 +28,7 @@ export const frameCss = `
   box-sizing: border-box; height: 56px; padding: 6px 16px; background: var(--page); border-top: 1px solid var(--hairline); }
 .r-strip > * { flex: 1 1 0; min-width: 0; }
 .r-strip > .r-filled { flex: 2 1 0; }
+.r-strip .r-anchor > .r-button { width: 100%; }
 .r-strip .r-button { padding-left: 6px; padding-right: 6px; white-space: nowrap; }
 :root[data-typing] .r-strip, :root[data-typing] .r-places { display: none; }
 .r-veil { position: fixed; inset: 0; z-index: 50; display: flex; flex-direction: column; justify-content: flex-end;
@@ -63,7 +66,7 @@ export const frameCss = `
 .r-table tr[aria-current="true"] td { background: var(--card); box-shadow: inset 0 2px 0 var(--indigo), inset 0 -2px 0 var(--indigo); }
 .r-table tr[data-selectable] { cursor: pointer; }
 .r-cell-button { margin: 0; padding: 0; border: 0; background: none; color: inherit; font: inherit; cursor: pointer; }
-.r-cells { display: grid; grid-template-columns: auto 1fr; gap: 2px 16px; margin: 0; padding: 12px 0; border-bottom: 1px solid var(--hairline);
+.r-cells { display: grid; grid-template-columns: auto 1fr; gap: 2px 16px; margin: 0 -8px; padding: 12px 8px; border-bottom: 1px solid var(--hairline);
   font-family: var(--reading); font-size: 16px; line-height: 24px; color: var(--ink); }
 .r-cells dt { color: var(--ink-muted); font-size: 14px; }
 .r-cells dd { margin: 0; text-align: right; overflow-wrap: anywhere; }

@@ -14,7 +14,6 @@ export { Failure, type FailureProps } from './failure';
 export { Field, type FieldProps } from './field';
 export { FieldFrame, type FieldFrameProps, type FieldWiring } from './field-frame';
 export { followLink } from './follow-link';
-export { fontFiles } from './font-files';
 export { Form, type FormProps } from './form';
 export { Hairline } from './hairline';
 export { Heading, type HeadingProps } from './heading';
@@ -53,6 +52,8 @@ export {
   type Tone,
   touchTarget,
 } from './tokens';
+export { type FuseClass, useFuse } from './use-fuse';
+export { usePageKeys } from './use-page-keys';
 export { useTypingMark } from './use-typing-mark';
 export { web } from './web';
 export { Wordmark } from './wordmark';

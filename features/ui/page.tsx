@@ -4,7 +4,7 @@ import { DoubleRule } from './double-rule';
 import { Heading } from './heading';
 import { useLayout } from './layout';
 import { LinkText } from './link-text';
-import { space } from './tokens';
+import { font, space } from './tokens';
 
 export interface PageProps {
   /** Plain words: the document's title. */
@@ -84,7 +84,7 @@ export function Page(props: PageProps) {
         >
           {back ? (
             <LinkText href={back.href} size={16} target plain {...(back.onPress && { onPress: back.onPress })}>
-              ← {back.label}
+              <span style={{ fontFamily: font.number }}>←</span> {back.label}
             </LinkText>
           ) : (
             <View />

@@ -1,5 +1,4 @@
 import { View } from 'react-native';
-import Svg, { Path } from 'react-native-svg';
 import { useContainerWidth } from './layout';
 import { colour, staffSpace } from './tokens';
 
@@ -29,9 +28,9 @@ export function StaffLines({ kind, width, lineGap = staffSpace }: StaffLinesProp
   const lines = [0, 1, 2, 3, 4].map((i) => `M0 ${top + i * lineGap}H${end}`).join('');
   return (
     <View aria-hidden style={{ height, overflow: 'hidden', width: width ?? '100%' }}>
-      <Svg width={drawn} height={height}>
-        <Path d={lines} stroke={colour.staff} strokeWidth={STAFF_STROKE} fill="none" />
-      </Svg>
+      <svg width={drawn} height={height}>
+        <path d={lines} stroke={colour.staff} strokeWidth={STAFF_STROKE} fill="none" />
+      </svg>
       {kind === 'loading' ? (
         <div className="r-beat" style={{ position: 'absolute', inset: 0 }}>
           <svg width="100%" height={height}>

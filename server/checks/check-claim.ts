@@ -114,8 +114,9 @@ export class ClaimCheck {
       : verdict === 'closes'
         ? typedAsClosed(claim, raw, this.runControl())
         : null;
-    this.report({ phase: 'measuring', iteration: correction.iterations }, raw);
     const survey = closed === null ? null : surveyOrbit(claim, closed);
+    const returns = survey?.crossings.length ?? raw.returnsInside;
+    this.report({ phase: 'measuring', iteration: correction.iterations, returns }, raw);
     const expected = expectedClosure(claim, raw, correction.typed);
     return this.findings({ claim, raw, correction, shifts, verdict, survey, expectedClosure: expected });
   }
@@ -218,10 +219,10 @@ export class ClaimCheck {
     this.control.onProgress?.({
       time: period,
       iteration: 0,
-      ...known,
-      period,
       returns: watch.counted(),
       crossings: watch.zeros.length,
+      ...known,
+      period,
     });
   }
 }

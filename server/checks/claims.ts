@@ -2,7 +2,6 @@ import { type Finding } from '@/schemas/generated/contract';
 import { type Claim, type TypedValue } from '@/server/checks/claim';
 import { figure } from '@/server/checks/figure';
 import { finding } from '@/server/checks/finding';
-import { CLAIM_HALF_UNITS } from '@/server/checks/limits';
 import { type Survey } from '@/server/checks/study';
 import { type Multiplier } from '@/server/numerics/periodic/floquet-multipliers';
 import { withoutTrivial } from '@/server/checks/survey-orbit';
@@ -36,12 +35,19 @@ export function returnClaims({ returns, returnTimes, tolerance }: Claim, survey:
   if (beyond[worst]! <= 0) return findings;
   const { returnTime } = survey.crossings[worst]!;
   const message = `Return time ${worst + 1} is ${String(returnTime)}; ${returnTimes[worst]!.text} is stated.`;
-  return [...findings, finding('return-times-differ', { message, value: returnTime, limit: returnTimes[worst]!.value })];
+  return [
+    ...findings,
+    finding('return-times-differ', { message, value: returnTime, limit: returnTimes[worst]!.value }),
+  ];
 }
 
-/** By how much a stated number is further from the one found than its last place and the slack allow. */
+/**
+ * By how much a stated number is further from the one found than its last place and the slack allow. Printed figures are
+ * rounded (half a unit off, either way) or cut off (up to a unit too small).
+ */
 function excess({ value, halfUnit }: TypedValue, found: number, slack: number): number {
-  return Math.abs(found - value) - CLAIM_HALF_UNITS * halfUnit - slack;
+  const cutOff = Math.abs(found) >= Math.abs(value) && found * value >= 0;
+  return Math.abs(found - value) - (cutOff ? 2 : 1) * halfUnit - slack;
 }
 
 /** Compare the stated multipliers, in any order, with those found; a stated trivial 1 is allowed where all are given. */

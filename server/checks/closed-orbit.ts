@@ -1,14 +1,27 @@
 import { type Claim } from '@/server/checks/claim';
 import { type RunControl } from '@/server/checks/raw-run';
 import { type RawRun } from '@/server/checks/study';
-import { type ClosedOrbit } from '@/server/checks/survey-orbit';
-import { condenseSegments } from '@/server/numerics/periodic/condense-segments';
+import { condenseSegments, type EndRelation } from '@/server/numerics/periodic/condense-segments';
 import { type CorrectedOrbit } from '@/server/numerics/periodic/correct-orbit';
 import { orbitSizes } from '@/server/numerics/periodic/orbit-sizes';
 import { planSingleShot } from '@/server/numerics/periodic/plan-single-shot';
 import { scaleMatrix } from '@/server/numerics/periodic/scale-matrix';
-import { shoot } from '@/server/numerics/periodic/shoot';
+import { shoot, type ShotSegment } from '@/server/numerics/periodic/shoot';
 import { stateDifference } from '@/server/numerics/periodic/state-difference';
+import { type SectionWatch } from '@/server/numerics/section/create-section-watch';
+
+/** A closed orbit as integrated, ready to be measured. */
+export interface ClosedOrbit {
+  start: Float64Array;
+  period: number;
+  sizes: Float64Array;
+  watch: SectionWatch;
+  segments: readonly ShotSegment[];
+  relation: EndRelation;
+  rankCutOff: number;
+  divergenceIntegral: number;
+  winding: (number | null)[] | null;
+}
 
 /** Singular values below this mean a family. */
 const RANK_CUT_OFF = 1e-9;

@@ -22,9 +22,6 @@ export const DIGITS_HALF_UNITS = 10;
 export const SAME_ORBIT = 1e-8;
 export const SAME_ORBIT_TOLERANCES = 10;
 
-/** A claimed number may differ by one unit of its last place: printed figures are rounded or cut off. */
-export const CLAIM_HALF_UNITS = 2;
-
 /** Largest miss of M f = f and of Liouville's formula in a sound computation. */
 export const SELF_CHECK_FLOW = 1e-8;
 export const SELF_CHECK_LIOUVILLE = 1e-6;

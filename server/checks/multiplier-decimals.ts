@@ -5,8 +5,8 @@ import { type Multiplier } from '@/server/numerics/periodic/floquet-multipliers'
 const SMALLEST_POWER = -300;
 const LARGEST_POWER = 300;
 
-/** Digits kept of a multiplier that no double holds. */
-const DIGITS = 15;
+/** Digits of a multiplier that no double holds: its logarithm, beyond 690, is right to 1e-13. */
+const DIGITS = 12;
 
 /** Write a multiplier as decimals, also where it is beyond the range of doubles. */
 export function multiplierDecimals({ re, im, logModulus }: Multiplier): { re: string; im: string } {

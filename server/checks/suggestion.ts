@@ -71,13 +71,13 @@ export class SuggestionFinder {
 
 /** The number with each pair of neighbouring digits exchanged, where they differ; the decimal point stays. */
 export function exchangedDigits(text: string): string[] {
-  const places = [...text].flatMap((character, i) => (/[0-9]/.test(character) ? [i] : []));
+  const places = Array.from(text).flatMap((character, i) => (/[0-9]/.test(character) ? [i] : []));
   const end = text.search(/[eE/]/);
   const digits = end === -1 ? places : places.filter((place) => place < end);
   return digits.slice(1).flatMap((place, k) => {
     const before = digits[k]!;
     if (text[before] === text[place]) return [];
-    const characters = [...text];
+    const characters = Array.from(text);
     [characters[before], characters[place]] = [characters[place]!, characters[before]!];
     return [characters.join('')];
   });

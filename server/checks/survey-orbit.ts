@@ -1,22 +1,19 @@
 import { type Claim } from '@/server/checks/claim';
+import { type ClosedOrbit } from '@/server/checks/closed-orbit';
 import { itineraryOf } from '@/server/checks/itinerary';
 import { invariantsAlong } from '@/server/checks/invariants';
 import { SAME_ORBIT } from '@/server/checks/limits';
+import { orbitMultipliers } from '@/server/checks/orbit-multipliers';
 import { type Survey } from '@/server/checks/study';
 import { multiplyMatrices } from '@/server/numerics/linear/multiply-matrices';
-import { type EndRelation } from '@/server/numerics/periodic/condense-segments';
-import { floquetMultipliers, type Multiplier } from '@/server/numerics/periodic/floquet-multipliers';
+import { type Multiplier } from '@/server/numerics/periodic/floquet-multipliers';
 import { frobeniusNorm } from '@/server/numerics/periodic/frobenius-norm';
 import { judgeStability } from '@/server/numerics/periodic/judge-stability';
 import { orbitCrossings } from '@/server/numerics/periodic/orbit-crossings';
 import { scaleMatrix } from '@/server/numerics/periodic/scale-matrix';
-import { settleUnits } from '@/server/numerics/periodic/settle-units';
-import { type ShotSegment } from '@/server/numerics/periodic/shoot';
 import { smallestRepetition } from '@/server/numerics/periodic/smallest-repetition';
 import { smallestTransversality } from '@/server/numerics/periodic/smallest-transversality';
 import { transversality } from '@/server/numerics/periodic/transversality';
-import { unitMultiplicity } from '@/server/numerics/periodic/unit-multiplicity';
-import { type SectionWatch } from '@/server/numerics/section/create-section-watch';
 import { type Flow } from '@/server/numerics/taylor/flow';
 
 /** Multipliers are known to at least this; a modulus nearer to 1 cannot be told from it. */
@@ -24,19 +21,6 @@ const CIRCLE_FLOOR = 1e-8;
 
 /** Rounding of the multipliers of a matrix of norm 1, with room for their condition. */
 const CIRCLE_ROUNDING = 1e3 * Number.EPSILON;
-
-/** A closed orbit as integrated, ready to be measured. */
-export interface ClosedOrbit {
-  start: Float64Array;
-  period: number;
-  sizes: Float64Array;
-  watch: SectionWatch;
-  segments: readonly ShotSegment[];
-  relation: EndRelation;
-  rankCutOff: number;
-  divergenceIntegral: number;
-  winding: (number | null)[] | null;
-}
 
 /**
  * Measure a closed orbit: crossings, multipliers, stability, transversality, itinerary, invariants, self-checks.
@@ -46,7 +30,7 @@ export interface ClosedOrbit {
 export function surveyOrbit(claim: Claim, orbit: ClosedOrbit): Survey | null {
   const { flow, moduli } = claim;
   const { start, period, sizes, watch } = orbit;
-  const multipliers = multipliersOf(flow, orbit);
+  const multipliers = orbitMultipliers(flow, orbit);
   if (multipliers === null) return null;
   const unitMultipliers = multipliers.filter(isUnit).length;
   const crossings = orbitCrossings(watch.zeros, period, start);
@@ -79,14 +63,6 @@ export function withoutTrivial(multipliers: readonly Multiplier[]): Multiplier[]
 
 function isUnit({ re, im, logModulus }: Multiplier): boolean {
   return re === 1 && im === 0 && logModulus === 0;
-}
-
-function multipliersOf(flow: Flow, { segments, sizes, relation, rankCutOff }: ClosedOrbit): Multiplier[] | null {
-  const pieces = segments.flatMap((segment) => segment.pieces.map((piece) => scaleMatrix(piece, sizes)));
-  const found = floquetMultipliers(pieces, flow.dimension);
-  if (found === null) return null;
-  // The flow's own direction is always one, also where its rank is hidden by rounding.
-  return settleUnits(found, Math.max(1, unitMultiplicity(relation, rankCutOff)));
 }
 
 /** Norm of the whole derivative, in sizes. */

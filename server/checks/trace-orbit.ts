@@ -8,8 +8,8 @@ import { horner } from '@/server/numerics/section/horner';
 import { type TaylorStep } from '@/server/numerics/taylor/flow';
 
 /** Fewest and most points of a polyline. */
-export const TRACE_POINTS_SMALLEST = 2;
-export const TRACE_POINTS_LARGEST = 20_000;
+const TRACE_POINTS_SMALLEST = 2;
+const TRACE_POINTS_LARGEST = 20_000;
 
 /** A polyline whose ends are nearer than this share of its extent is drawn closed. */
 const DRAWN_CLOSED = 1e-6;
@@ -40,7 +40,10 @@ export function traceOrbit(system: CheckedSystem, orbit: TracedOrbit, points: nu
   const read = readClaim(system, orbit);
   if (!read.ok) return null;
   const { claim } = read;
-  const crossings = (orbit.crossings ?? []).map(({ time, point }) => ({ time: Number(time), point: point.map(Number) }));
+  const crossings = (orbit.crossings ?? []).map(({ time, point }) => ({
+    time: Number(time),
+    point: point.map(Number),
+  }));
   const legs = legsOf(claim, crossings);
   let steps = 0;
   walk(claim, legs, () => {
@@ -69,7 +72,7 @@ function walk({ flow }: Claim, legs: readonly Leg[], onStep: (step: TaylorStep, 
       duration,
       variations: false,
       maxSteps: STEPS_LARGEST,
-      onStep: (step) => void onStep(step, begun),
+      onStep: (step) => onStep(step, begun),
     });
     from += duration;
   }

@@ -1,11 +1,13 @@
+import { FormulaTrouble } from '@/server/formulas/formula-trouble';
 import { parse, SyntaxError as FormulaSyntaxError } from '@/server/formulas/generated/parser';
 import { FORMULA_CHARACTERS_LIMIT, FORMULA_NODES_LIMIT, NESTING_LIMIT } from '@/server/formulas/limits';
-import { FormulaTrouble, toExpression } from '@/server/formulas/to-expression';
 import type { ParsedNode } from '@/server/formulas/parsed-node';
+import { syntaxTrouble } from '@/server/formulas/syntax-trouble';
+import { toExpression } from '@/server/formulas/to-expression';
 import type { Expression } from '@/server/numerics/expression/expression';
 
 /** What is wrong with a formula; `position` counts characters from 1, null where the whole formula is meant. */
-export interface FormulaError {
+interface FormulaError {
   message: string;
   position: number | null;
 }
@@ -42,7 +44,7 @@ function parseText(text: string): ParsedNode {
   try {
     parsed = parse(text);
   } catch (error) {
-    if (error instanceof FormulaSyntaxError) throw syntaxTrouble(error);
+    if (error instanceof FormulaSyntaxError) throw syntaxTrouble(error, text);
     // The parser recurs: a tower of powers beyond the limit ends its stack first.
     if (error instanceof RangeError) throw new FormulaTrouble(`A formula nests at most ${NESTING_LIMIT} deep.`, null);
     throw error;
@@ -90,37 +92,6 @@ function childrenOf(node: ParsedNode): { child: ParsedNode; deeper: number }[] {
         { child: node.right, deeper: node.operator === '^' ? 1 : 0 },
       ];
   }
-}
-
-/** Characters of comparisons, conditionals and absolute values. */
-const UNSMOOTH = /[<>=?:|!&%]/;
-
-function syntaxTrouble(error: FormulaSyntaxError): FormulaTrouble {
-  const { offset } = error.location.start;
-  if (error.found !== null && UNSMOOTH.test(error.found)) {
-    return new FormulaTrouble(
-      `“${error.found}” is not part of a formula: comparisons, conditionals and absolute values are refused, since the check's order needs a smooth field.`,
-      offset,
-    );
-  }
-  const expected = [...new Set((error.expected ?? []).map(describe).filter((words) => words !== null))];
-  const wanted =
-    expected.length > 1
-      ? `${expected.slice(0, -1).join(', ')} or ${expected.at(-1)}`
-      : (expected[0] ?? 'something else');
-  return new FormulaTrouble(
-    error.found === null
-      ? `The formula ends too early: ${wanted} is missing.`
-      : `Here stands “${error.found}”; expected was ${wanted}.`,
-    offset,
-  );
-}
-
-function describe({ type, description, text }: { type: string; description?: string; text?: string }): string | null {
-  if (type === 'end') return 'the end';
-  if (type === 'class') return 'an operator';
-  if (type === 'literal') return text === '^' ? 'an operator' : `“${text}”`;
-  return description === 'space' || description === undefined ? null : description;
 }
 
 const refuse = (message: string, at: number | null): ParsedFormula => ({

@@ -1,16 +1,7 @@
+import { FormulaTrouble } from '@/server/formulas/formula-trouble';
 import { NAME_CHARACTERS_LIMIT } from '@/server/formulas/limits';
 import type { ParsedNode } from '@/server/formulas/parsed-node';
 import { type Expression, type FunctionName, functionNames } from '@/server/numerics/expression/expression';
-
-/** What is wrong with a formula; `at` is an offset, null where the whole formula is meant. */
-export class FormulaTrouble extends Error {
-  constructor(
-    message: string,
-    readonly at: number | null,
-  ) {
-    super(message);
-  }
-}
 
 /** Functions that people know and that a smooth field cannot hold. */
 const unsmooth = new Set(
@@ -18,6 +9,22 @@ const unsmooth = new Set(
     ' ',
   ),
 );
+
+/** Spellings of other languages, and what to write here. */
+const spellings = new Map([
+  ['ln', 'log(…), the natural logarithm'],
+  ['log10', 'log(…)/log(10)'],
+  ['log2', 'log(…)/log(2)'],
+  ['pow', 'x^y'],
+  ['power', 'x^y'],
+  ['cbrt', 'x^(1/3)'],
+  ['cot', '1/tan(…)'],
+  ['sec', '1/cos(…)'],
+  ['csc', '1/sin(…)'],
+  ['arcsin', 'asin(…)'],
+  ['arccos', 'acos(…)'],
+  ['arctan', 'atan(…)'],
+]);
 const functions = new Map<string, FunctionName>(functionNames.map((name) => [name, name]));
 
 /** Names that nobody may give to a variable, parameter or definition. */
@@ -70,6 +77,7 @@ function nameOf(name: string, at: number, known: ReadonlySet<string>): Expressio
       at,
     );
   }
+  if (name === 'e') throw new FormulaTrouble('There is no constant e; write exp(1), and exp(x) for its powers.', at);
   throw new FormulaTrouble(`The name ${name} is neither a variable nor a parameter nor an earlier definition.`, at);
 }
 
@@ -85,7 +93,9 @@ function callOf(node: Extract<ParsedNode, { kind: 'call' }>, known: ReadonlySet<
         node.at,
       );
     }
-    throw new FormulaTrouble(`There is no function ${node.function}. There are ${functionNames.join(', ')}.`, node.at);
+    const spelling = spellings.get(node.function);
+    const advice = spelling ? `Write ${spelling}.` : `There are ${functionNames.join(', ')}.`;
+    throw new FormulaTrouble(`There is no function ${node.function}. ${advice}`, node.at);
   }
   const [argument, second] = node.arguments;
   if (!argument || second) throw new FormulaTrouble(`${name} takes one argument.`, node.at);

@@ -2,7 +2,7 @@ import type { Request, Response } from 'express';
 import { tooMany } from '@/server/errors';
 
 /** Streams that one client may hold open on this server. */
-export const MAX_STREAMS = 4;
+const MAX_STREAMS = 4;
 /** Proxies cut a connection on which nothing comes; a comment comes this often. */
 const HEARTBEAT_MS = 15_000;
 /** A stream ends by then; the browser asks again by itself. */

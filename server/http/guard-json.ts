@@ -2,7 +2,7 @@ import { invalidBody } from '@/server/errors';
 import { childPointer, pointerLabel } from '@/server/http/json-pointer';
 
 /** Deepest nesting of a body; a submission needs four. */
-export const MAX_BODY_DEPTH = 32;
+const MAX_BODY_DEPTH = 32;
 
 interface Visit {
   value: unknown;

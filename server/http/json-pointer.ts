@@ -3,7 +3,7 @@ export const childPointer = (parent: string, member: string | number): string =>
   `${parent}/${String(member).replaceAll('~', '~0').replaceAll('/', '~1')}`;
 
 /** The members a JSON Pointer walks through. */
-export const pointerParts = (pointer: string): string[] =>
+const pointerParts = (pointer: string): string[] =>
   pointer
     .split('/')
     .slice(1)

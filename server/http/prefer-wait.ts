@@ -1,7 +1,7 @@
 import type { Request, Response } from 'express';
 
 /** Longest wait that is honoured, in seconds. */
-export const MAX_WAIT_SECONDS = 60;
+const MAX_WAIT_SECONDS = 60;
 
 const WAIT = /(?:^|[,;\s])wait\s*=\s*"?([0-9]{1,9})"?(?=\s*(?:[,;]|$))/i;
 

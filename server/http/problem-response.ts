@@ -8,7 +8,7 @@ import type { Log } from '@/server/log';
 const STATEMENT_TIMEOUT = '57014';
 
 /** A problem as RFC 9457 `application/problem+json`. */
-export function sendProblem(req: Request, res: Response, problem: Problem): void {
+function sendProblem(req: Request, res: Response, problem: Problem): void {
   const body: ProblemBody = {
     type: `/api/v1/openapi.json#/x-problems/${problem.code}`,
     title: problem.title,

@@ -7,7 +7,7 @@ const QUARTER_HOUR = 900;
 const HOUR = 3600;
 
 /** Failed sign-ins of one account from one address, in a quarter of an hour. */
-export const MAX_FAILED_PER_ACCOUNT_AND_ADDRESS = 10;
+const MAX_FAILED_PER_ACCOUNT_AND_ADDRESS = 10;
 /** Failed sign-ins of one account from anywhere, in a quarter of an hour. */
 const MAX_FAILED_PER_ACCOUNT = 60;
 /** Failed sign-ins from one address, in a quarter of an hour. */

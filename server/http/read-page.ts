@@ -1,7 +1,7 @@
 import { type FieldError, invalidQuery } from '@/server/errors';
 
-export const MAX_LIMIT = 200;
-export const DEFAULT_LIMIT = 50;
+const MAX_LIMIT = 200;
+const DEFAULT_LIMIT = 50;
 
 /** The part of a query that every list takes. */
 export interface PageRequest {
@@ -32,7 +32,7 @@ export function readPage(query: Query, known: readonly string[] = []): PageReque
 }
 
 /** A whole number from 1 to 200; anything else is noted in `errors`. */
-export function readLimit(given: unknown, errors: FieldError[]): number {
+function readLimit(given: unknown, errors: FieldError[]): number {
   if (given === undefined) return DEFAULT_LIMIT;
   const limit = typeof given === 'string' && /^[0-9]{1,4}$/.test(given) ? parseInt(given, 10) : 0;
   if (limit < 1 || limit > MAX_LIMIT) {

@@ -24,7 +24,7 @@ export function serveWeb(folder: string): Router {
   );
   router.get('/{*path}', (req, res, next) => {
     if (isFile(req.path) || !req.accepts('html') || !existsSync(page)) next();
-    else res.set('Cache-Control', REVALIDATE).sendFile(page);
+    else res.set('Cache-Control', REVALIDATE).sendFile('index.html', { root: folder });
   });
   return router;
 }

@@ -5,7 +5,7 @@ import type { AppDependencies } from '@/server/app-dependencies';
 import { SESSION_COOKIE } from '@/server/http/session-cookie';
 
 /** How long a sign-in lasts: fourteen days. */
-export const SESSION_SECONDS = 1_209_600;
+const SESSION_SECONDS = 1_209_600;
 /** Expired sign-ins are cleared this often, in seconds. */
 const PRUNE_SECONDS = 900;
 

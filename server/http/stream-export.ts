@@ -6,7 +6,7 @@ import { type ExportFormat, exportFormats } from '@/server/presenters/export-for
 import type { OrbitExport } from '@/server/services/export-orbits';
 
 /** Exports that one server streams at a time; each holds a connection to the database. */
-export const MAX_EXPORTS = 4;
+const MAX_EXPORTS = 4;
 const RETRY_SECONDS = 10;
 
 /** Lets so many exports run at a time and refuses the rest with 429. */

@@ -37,7 +37,7 @@ export function checkOrbitJob(tools: CheckTools): Task {
       if (tools.stopping.aborted) return giveBackCheck(tools.desk.db, check);
       tools.log.error({ err: error, check: check.id, attempt: job.attempts }, 'a check broke off');
       if (job.attempts < TRIES) throw error;
-      await failCheck(tools.desk, check, 'The computation broke off on our side, every time it was tried.');
+      await failCheck(tools.desk, check, `The computation broke off on our side, ${TRIES} times: ${messageOf(error)}`);
     }
   };
 }
@@ -59,7 +59,7 @@ async function compute(tools: CheckTools, check: OrbitCheck): Promise<{ report: 
   const startedAt = Date.now();
   try {
     const report = await inThread(tools, task, port2);
-    return { report, computeMs: Date.now() - startedAt };
+    return { report, computeMs: report.engine.cpuMs };
   } catch (error) {
     const computeMs = Date.now() - startedAt;
     if (tools.stopping.aborted || !isLimit(error)) throw error;
@@ -84,6 +84,11 @@ async function inThread(
     clearTimeout(timer);
   }
 }
+
+const LONGEST_MESSAGE = 300;
+
+const messageOf = (error: unknown): string =>
+  (error instanceof Error ? error.message : String(error)).slice(0, LONGEST_MESSAGE);
 
 /** Whether a thread was ended because it took too long or too much memory: an answer, not a crash. */
 function isLimit(error: unknown): boolean {

@@ -77,7 +77,8 @@ export class Orbit extends Model<InferAttributes<Orbit>, InferCreationAttributes
         contributorId: { type: DataTypes.UUID, allowNull: false },
         curatorId: { type: DataTypes.UUID, allowNull: false },
         submittedAt: { type: DataTypes.DATE, allowNull: false },
-        acceptedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
+        // The database's own clock: acceptances are compared with the beginnings of checks.
+        acceptedAt: { type: DataTypes.DATE },
         withdrawnAt: { type: DataTypes.DATE },
         withdrawalReason: { type: DataTypes.TEXT },
         replacement: { type: DataTypes.INTEGER },

@@ -1,22 +1,21 @@
 import { type Request, type Response, Router } from 'express';
 import type { CheckRequest } from '@/schemas/generated/contract';
 import type { AppDependencies } from '@/server/app-dependencies';
-import { invalidQuery } from '@/server/errors';
 import { userOf } from '@/server/http/current-user';
 import { type EventStream, EventStreams } from '@/server/http/event-stream';
 import { idempotent } from '@/server/http/idempotency';
 import { preferredWait } from '@/server/http/prefer-wait';
 import { addressOf } from '@/server/http/rate-limits';
+import { readPoints } from '@/server/http/read-points';
 import { requesterOf } from '@/server/http/requester';
 import { bodyOf, validBody } from '@/server/http/valid-body';
 import type { OrbitCheck } from '@/server/models/orbit-check';
 import { presentCheck, presentProgress } from '@/server/presenters/check';
+import { Bell } from '@/server/services/bell';
 import { findCheck, reportOf } from '@/server/services/find-check';
 import { startCheck } from '@/server/services/start-check';
 import { traceCheck } from '@/server/services/trace-check';
-import { isOver, waitForCheck } from '@/server/services/wait-for-check';
-
-const POINTS = { least: 2, most: 5000, otherwise: 600 };
+import { ASK_EVERY_MS, isOver, waitForCheck } from '@/server/services/wait-for-check';
 
 /** Checks: anyone may ask for one. */
 export function checkRoutes(dependencies: AppDependencies): Router {
@@ -48,7 +47,7 @@ export function checkRoutes(dependencies: AppDependencies): Router {
   });
 
   router.get('/checks/:id/trace', async (req, res) => {
-    const points = readPoints(req.query['points']);
+    const points = readPoints(req.query);
     const check = await checkOf(req);
     res.set('Cache-Control', 'private, max-age=3600').json(await traceCheck(db, tracer, check, points));
   });
@@ -78,11 +77,8 @@ interface Following {
 
 /** Tell a stream how a check gets on, until it is over or nobody listens. */
 async function follow({ checks }: AppDependencies, { check, stream, over }: Following): Promise<void> {
-  let wake = (): void => undefined;
-  const news = (): Promise<void> => new Promise((resolve) => (wake = resolve));
-  let next = news();
-  const stop = checks.watch(check.id, () => wake());
-  over.addEventListener('abort', () => wake());
+  const bell = new Bell();
+  const stop = checks.watch(check.id, () => bell.ring());
   try {
     for (let told = ''; !over.aborted;) {
       await check.reload();
@@ -90,19 +86,9 @@ async function follow({ checks }: AppDependencies, { check, stream, over }: Foll
       if (told !== JSON.stringify(now)) stream.send(isOver(check) ? 'done' : 'progress', now);
       told = JSON.stringify(now);
       if (isOver(check)) return;
-      await next;
-      next = news();
+      await bell.wait(ASK_EVERY_MS, over);
     }
   } finally {
     stop();
   }
-}
-
-function readPoints(given: unknown): number {
-  if (given === undefined || given === '') return POINTS.otherwise;
-  const points = /^[0-9]{1,6}$/.test(String(given)) ? parseInt(String(given), 10) : 0;
-  if (points >= POINTS.least && points <= POINTS.most) return points;
-  throw invalidQuery([
-    { pointer: '#points', message: `points is a whole number from ${POINTS.least} to ${POINTS.most}.` },
-  ]);
 }

@@ -27,8 +27,8 @@ export function entryRoutes({ pool, tracer }: AppDependencies): Router {
     const points = readPoints(req.query);
     const request = await findTraceRequest(pool, { accession: req.params['accession'], points });
     const trace = await tracer.trace(request);
-    // Catalogued orbits close, and a revision never changes; the engine that draws it does.
-    res.set('Cache-Control', 'public, max-age=3600').json({ ...trace, closes: true });
+    // A revision never changes; the engine that draws it may.
+    res.set('Cache-Control', 'public, max-age=3600').json(trace);
   });
 
   router.get('/orbits/:accession/revisions', async (req, res) => {

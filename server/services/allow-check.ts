@@ -28,11 +28,11 @@ export async function allowCheck(db: Sequelize, requester: Requester, transactio
   await db.query('select pg_advisory_xact_lock(hashtextextended($1, 1))', { bind: [who], transaction });
   const column = isAccount ? 'owner_id' : 'address_hash';
   const [used] = await db.query<{ waiting: number; used: boolean; oldest: number | null }>(
-    `select count(*) filter (where state in ('queued', 'running') and submission_id is null)::integer as waiting,
+    `select count(*) filter (where finished_at is null and submission_id is null)::integer as waiting,
        coalesce(sum(compute_ms), 0) >= $3 * 1000 as used,
        extract(epoch from min(finished_at) filter (where compute_ms > 0) - now())::float8 as oldest
      from orbit_check where ${column} = $1
-       and (state in ('queued', 'running') or finished_at > now() - make_interval(secs => $2))`,
+       and (finished_at is null or finished_at > now() - make_interval(secs => $2))`,
     { bind: [who, computing.windowSeconds, computing.seconds], type: QueryTypes.SELECT, transaction },
   );
   if (used!.waiting >= atOnce) {

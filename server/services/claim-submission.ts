@@ -7,7 +7,7 @@ import type { Desk } from '@/server/services/desk';
 import { isCurator, lockSubmission, type Person } from '@/server/services/find-submission';
 
 /** How long a claim holds without any activity. */
-export const CLAIM_MINUTES = 30;
+const CLAIM_MINUTES = 30;
 const MINUTE_MS = 60_000;
 
 const leaseEnd = (): Date => new Date(Date.now() + CLAIM_MINUTES * MINUTE_MS);

@@ -8,7 +8,7 @@ import { eventsSince } from '@/server/services/find-submission';
 export type SeenVersion = readonly number[] | 'any' | null;
 
 /** The ETag that stands for a submission after so many changes, however it is shown. */
-export const versionTag = (changes: number): string => `"v${changes}"`;
+const versionTag = (changes: number): string => `"v${changes}"`;
 
 /**
  * Insist that a change was made knowing the submission as it is. Test rights before.

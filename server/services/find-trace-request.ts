@@ -1,7 +1,7 @@
 import type { Pool } from 'pg';
 import type { SystemDocument } from '@/schemas/generated/contract';
-import type { TraceRequest } from '@/server/checks/trace-orbit';
 import { findEntry } from '@/server/services/find-entry';
+import type { TraceRequest } from '@/server/services/tracer';
 
 /**
  * What has to be followed to draw an entry: its corrected start, in the version of the system that it is about.
@@ -23,6 +23,7 @@ export async function findTraceRequest(
     section: { formula: entry.section_formula },
     point: entry.content.point,
     period: entry.content.period,
+    crossings: entry.content.crossings,
     points,
   };
 }

@@ -2,7 +2,7 @@ import { compare, hash } from 'bcryptjs';
 import { Problem } from '@/server/errors';
 
 /** bcrypt reads no further: two passwords that differ only beyond would be the same. */
-export const MAX_PASSWORD_BYTES = 72;
+const MAX_PASSWORD_BYTES = 72;
 /** Rounds as a power of two, about 0.2 s; tests sign in hundreds of times and use the least that bcrypt allows. */
 const COST = process.env['NODE_ENV'] === 'test' ? 4 : 11;
 

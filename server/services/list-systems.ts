@@ -2,7 +2,7 @@ import type { Pool } from 'pg';
 import type { SystemDocument } from '@/schemas/generated/contract';
 
 /** An accepted system in its current version. */
-export interface SystemRow {
+interface SystemRow {
   id: string;
   slug: string;
   version: number;

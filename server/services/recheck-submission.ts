@@ -20,8 +20,9 @@ export function recheckSubmission(desk: Desk, person: Person, id: string): Promi
     const submission = await lockSubmission(id, person, transaction);
     const { revision } = submission;
     await renewClaim(submission, person, transaction);
-    const under = { submissionId: id, revision, state: ['queued', 'running'] };
-    if ((await OrbitCheck.count({ where: under, transaction })) > 0) return;
+    const isOpen = submission.reviewState === 'submitted' || submission.reviewState === 'in-review';
+    const underWay = { submissionId: id, revision, state: ['queued', 'running'] };
+    if (isOpen && (await OrbitCheck.count({ where: underWay, transaction })) > 0) return;
     const { body } = await SubmissionRevision.findOne({
       where: { submissionId: id, revision },
       rejectOnEmpty: true,

@@ -7,6 +7,8 @@ import type { EntryContent } from '@/server/models/orbit-revision';
 import type { KnownSystem } from '@/server/services/known-system';
 import { numberOf } from '@/server/services/parameters-of';
 
+/** An acceptance takes no longer than this from its first row to its end, when others can see it. */
+const UNSEEN_SECONDS = 30;
 /** Periods of one orbit, corrected twice, differ by less than this share. */
 const PERIOD_WINDOW = 1e-6;
 
@@ -36,10 +38,10 @@ export async function refuseKnownOrbit(
     `select o.accession, c.formula, r.content from orbit o
      join section c on c.id = o.section_id
      join orbit_revision r on r.orbit_number = o.number and r.revision = o.revision
-     where o.system_id = $1 and o.parameters_hash = $2 and o.status = 'accepted' and o.accepted_at >= $4
+     where o.system_id = $1 and o.parameters_hash = $2 and o.status = 'accepted' and o.accepted_at >= $4::timestamptz - make_interval(secs => $6)
        and o.period between $3::float8 * (1 - $5::float8) and $3::float8 * (1 + $5::float8)`,
     {
-      bind: [system.id, parametersHash, numberOf(orbit.period).value, comparedAt, PERIOD_WINDOW],
+      bind: [system.id, parametersHash, numberOf(orbit.period).value, comparedAt, PERIOD_WINDOW, UNSEEN_SECONDS],
       type: QueryTypes.SELECT,
       transaction,
     },

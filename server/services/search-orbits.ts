@@ -10,10 +10,10 @@ import type { OrbitSearch } from '@/server/search/read-search';
 import { Binds } from '@/server/search/sql';
 
 /** Results are counted up to here; beyond, the total is "at least" this. */
-export const MAX_COUNTED = 10_000;
+const MAX_COUNTED = 10_000;
 
 /** One entry of a result, with the values that its order goes by. */
-export interface FoundRow extends EntryRow {
+interface FoundRow extends EntryRow {
   place_texts: string[];
   distance: number | null;
 }

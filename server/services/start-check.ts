@@ -14,7 +14,7 @@ import { validateClaim } from '@/server/services/validate-claim';
  */
 export async function startCheck(db: Sequelize, requester: Requester, body: CheckRequest): Promise<OrbitCheck> {
   if (!('accountId' in requester) && body.digits !== undefined) {
-    const message = 'More digits than a double holds are computed for accounts only: sign in, or leave digits out.';
+    const message = 'A number of digits is confirmed for accounts only: sign in, or leave digits out.';
     throw invalidContent([{ pointer: '/digits', message }]);
   }
   const known = typeof body.system === 'string' ? await knownSystem(db, body.system) : null;

@@ -13,10 +13,10 @@ export async function traceCheck(db: Sequelize, tracer: Tracer, check: OrbitChec
   const document = isKnown
     ? (await systemVersion(db, systemId, version)).checked.document
     : (body.system as SystemDocument);
-  const closes = report !== null && report.verdict.startsWith('closes');
-  const { point, period } = (closes ? report.orbit : null) ?? body;
-  const drawn = await tracer.trace({
+  const found = report?.verdict.startsWith('closes') ? report.orbit : null;
+  const { point, period } = found ?? body;
+  return tracer.trace({
     ...{ document, parameters: body.parameters ?? {}, section: body.section, point, period, points },
+    ...(found ? { crossings: found.crossings } : {}),
   });
-  return { ...drawn, closes };
 }

@@ -1,16 +1,21 @@
 import type Piscina from 'piscina';
-import type { Trace } from '@/schemas/generated/contract';
-import type { TraceRequest } from '@/server/checks/trace-orbit';
+import type { SystemDocument, Trace } from '@/schemas/generated/contract';
+import type { TracedOrbit } from '@/server/checks/trace-orbit';
 
-/** Longest computing for one drawing. */
-const SECONDS = 5;
-/** A thread that does not end by itself is ended so much later. */
-const GRACE_MS = 1_000;
+/** What is to be drawn: an orbit of a system. */
+export interface TraceRequest extends TracedOrbit {
+  document: SystemDocument;
+  /** Points of the polyline. */
+  points: number;
+}
+
+/** A drawing that takes longer is given up, and its thread ended. */
+const LONGEST_MS = 10_000;
 
 /** Follows orbits for drawing, on threads of its own, so that no request waits for another's arithmetic. */
 export interface Tracer {
-  /** Everything of a trace but whether the orbit closes. */
-  trace(request: TraceRequest): Promise<Omit<Trace, 'closes'>>;
+  /** The polyline, the crossings, and whether it closes. */
+  trace(request: TraceRequest): Promise<Trace>;
   close(): Promise<void>;
 }
 
@@ -20,8 +25,8 @@ export function createTracer(startPool: () => Piscina): Tracer {
   return {
     async trace(request) {
       pool ??= startPool();
-      const signal = AbortSignal.timeout(SECONDS * 1000 + GRACE_MS);
-      return (await pool.run({ request, seconds: SECONDS }, { name: 'trace', signal })) as Omit<Trace, 'closes'>;
+      const signal = AbortSignal.timeout(LONGEST_MS);
+      return (await pool.run(request, { name: 'trace', signal })) as Trace;
     },
     close: async () => {
       await pool?.destroy();

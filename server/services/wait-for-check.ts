@@ -1,8 +1,9 @@
-import { OrbitCheck } from '@/server/models/orbit-check';
+import type { OrbitCheck } from '@/server/models/orbit-check';
+import { Bell } from '@/server/services/bell';
 import type { CheckWatch } from '@/server/services/check-watch';
 
 /** News can be lost with a connection: the database is asked again this often. */
-const ASK_EVERY_MS = 2_000;
+export const ASK_EVERY_MS = 2_000;
 
 /** Whether a check has nothing more to say. */
 export const isOver = ({ state }: Pick<OrbitCheck, 'state'>): boolean => state === 'done' || state === 'failed';
@@ -19,36 +20,18 @@ export async function waitForCheck(
   { seconds, signal }: { seconds: number; signal: AbortSignal },
 ): Promise<OrbitCheck> {
   const end = Date.now() + seconds * 1000;
-  let wake = (): void => undefined;
-  let news = false;
-  const stop = watch.watch(check.id, () => {
-    news = true;
-    wake();
-  });
+  const bell = new Bell();
+  const stop = watch.watch(check.id, () => bell.ring());
   try {
     // What happens before the first reading is in it; what happens after it is heard.
     await watch.ready().catch(() => undefined);
     await check.reload();
     while (!isOver(check) && Date.now() < end && !signal.aborted) {
-      if (!news) await pause(Math.min(ASK_EVERY_MS, end - Date.now()), signal, (resume) => (wake = resume));
-      news = false;
+      await bell.wait(Math.min(ASK_EVERY_MS, end - Date.now()), signal);
       await check.reload();
     }
     return check;
   } finally {
     stop();
   }
-}
-
-function pause(ms: number, signal: AbortSignal, onStart: (resume: () => void) => void): Promise<void> {
-  return new Promise((resolve) => {
-    const done = (): void => {
-      clearTimeout(timer);
-      signal.removeEventListener('abort', done);
-      resolve();
-    };
-    const timer = setTimeout(done, ms);
-    signal.addEventListener('abort', done);
-    onStart(done);
-  });
 }

@@ -7,9 +7,9 @@ import type { Desk } from '@/server/services/desk';
 import { failCheck } from '@/server/services/run-check';
 
 /** A worker tells this often that it lives. */
-export const BEAT_EVERY_MS = 4_000;
+export const BEAT_EVERY_MS = 3_000;
 /** A worker that has been silent for so long counts as dead. */
-export const DEAD_AFTER_SECONDS = 16;
+export const DEAD_AFTER_SECONDS = 12;
 
 /** Tell that a worker lives, and under which names it takes jobs. */
 export async function beat(db: Sequelize, worker: { id: string; queueIds: readonly string[] }): Promise<void> {

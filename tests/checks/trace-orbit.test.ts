@@ -3,7 +3,11 @@ import { circle, lorenz, LORENZ_AB } from './claims';
 
 describe('traceOrbit', () => {
   it('draws points of the unit circle, from 0 to the period', () => {
-    const trace = traceOrbit(circle, { section: { formula: 'y' }, point: ['1', '0'], period: '6.283185307179586' }, 50)!;
+    const trace = traceOrbit(
+      circle,
+      { section: { formula: 'y' }, point: ['1', '0'], period: '6.283185307179586' },
+      50,
+    )!;
     expect(trace.variables).toEqual(['x', 'y']);
     expect(trace.points).toHaveLength(50);
     trace.points.forEach(([x, y], k) => {
@@ -36,6 +40,8 @@ describe('traceOrbit', () => {
 
   it('is null for a body that cannot be read and refuses 1 point', () => {
     expect(traceOrbit(circle, { section: { formula: 'y' }, point: ['1'], period: '3' }, 10)).toBeNull();
-    expect(() => traceOrbit(circle, { section: { formula: 'y' }, point: ['1', '0'], period: '3' }, 1)).toThrow(RangeError);
+    expect(() => traceOrbit(circle, { section: { formula: 'y' }, point: ['1', '0'], period: '3' }, 1)).toThrow(
+      RangeError,
+    );
   });
 });

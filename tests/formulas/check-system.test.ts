@@ -38,6 +38,42 @@ describe('checkSystem', () => {
     ['an unknown name', { equations: { q: 'omega*r', p: '-q' } }, '/system/equations/q', /name r/],
     ['a missing equation', { equations: { q: 'p' } }, '/system/equations', /equation of p is missing/],
     ['an equation of nothing', { equations: { q: 'p', p: '-q', r: '1' } }, '/system/equations/r', /not a variable/],
+    [
+      'a symmetry of a stranger',
+      { symmetries: [{ name: 's', map: { q: 'q', p: 'p', r: 'q' }, reversesTime: false }] },
+      '/system/symmetries/0/map/r',
+      /not a variable/,
+    ],
+    [
+      'a symmetry with an image missing',
+      { symmetries: [{ name: 's', map: { q: '-q' }, reversesTime: false }] },
+      '/system/symmetries/0/map',
+      /image of p is missing/,
+    ],
+    [
+      'an equation of every object’s prototype',
+      { equations: JSON.parse('{ "q": "p", "p": "-q", "__proto__": "1" }') as Record<string, string> },
+      '/system/equations/__proto__',
+      /not a variable/,
+    ],
+    [
+      'a section that is a number',
+      { sections: [{ name: 's', formula: 'omega - 1/2' }] },
+      '/system/sections/0/formula',
+      /no variable/,
+    ],
+    [
+      'an incipit of a stranger',
+      { sections: [{ name: 's', formula: 'q', incipit: { coordinate: 'r', levels: [2, 1, 0, -1, -2] } }] },
+      '/system/sections/0/incipit/coordinate',
+      /r is not a variable/,
+    ],
+    [
+      'a modulus of zero',
+      { variables: [{ name: 'q', modulus: '0*pi' }, { name: 'p' }] },
+      '/system/variables/0/modulus',
+      /positive/,
+    ],
     ['a name twice', { parameters: [{ name: 'q', value: 1 }] }, '/system/parameters/0/name', /two things/],
     ['a function’s name', { parameters: [{ name: 'sin', value: 1 }] }, '/system/parameters/0/name', /function/],
     [

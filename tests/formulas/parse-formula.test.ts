@@ -1,3 +1,4 @@
+import fc from 'fast-check';
 import { evaluate } from '@/server/formulas/evaluate';
 import { formatFormula } from '@/server/formulas/format-formula';
 import { parseFormula } from '@/server/formulas/parse-formula';
@@ -42,6 +43,18 @@ describe('parseFormula', () => {
     ['an open end', 'x+', 3, /ends too early/],
     ['a product without a sign', '2x', 2, /Here stands “x”/],
     ['a stranger’s power', 'x**2', 3, /“\*”/],
+    ['a typeset minus', 'x − y', 3, /minus sign is typed as -/],
+    ['a typeset power', 'x²', 2, /power is typed as \^/],
+    ['an open parenthesis', '(x + y', 7, /“\)” is missing/],
+    ['a closing parenthesis too many', 'x + y)', 6, /Here stands “\)”/],
+    ['a point without a digit before it', '.5*x', 1, /digit stands before/],
+    ['a point without a digit after it', '5.*x', 2, /digit stands after/],
+    ['a function without parentheses', 'sin x', 5, /function sin needs its argument in parentheses/],
+    ['another language’s logarithm', 'y + ln(x)', 5, /no function ln. Write log/],
+    ['Euler’s number', 'e^x', 1, /exp\(1\)/],
+    ['a character outside the plane', 'x + 𝜃', 5, /Here stands “𝜃”/],
+    ['the prototype of every object', '__proto__', 1, /Here stands “_”/],
+    ['a remainder', 'x % y', 3, /smooth/],
     ['an unknown name', 'x + q', 5, /name q/],
     ['a property of every object', 'x*constructor', 3, /name constructor/],
     ['explicit time', 'cos(t)', 5, /phase a variable/],
@@ -63,5 +76,26 @@ describe('parseFormula', () => {
   ])('refuses %s and says where', (_, text, position, message) => {
     const parsed = parseFormula(text, known);
     expect(parsed).toMatchObject({ ok: false, error: { position, message: expect.stringMatching(message) } });
+  });
+
+  it('answers anything that can be typed, with a position inside it where there is one', () => {
+    const pieces = fc.array(
+      fc.oneof(
+        fc.constantFrom(...Array.from('xy0.e+-*/^(), \n'), 'sin', 'abs(', 'pi', 't', '1e5'),
+        fc.string({ unit: 'binary' }),
+      ),
+      { maxLength: 30 },
+    );
+    fc.assert(
+      fc.property(pieces, (parts) => {
+        const text = parts.join('');
+        const parsed = parseFormula(text, known);
+        if (parsed.ok || parsed.error.position === null) return;
+        expect(parsed.error.position).toBeGreaterThanOrEqual(1);
+        expect(parsed.error.position).toBeLessThanOrEqual(text.length + 1);
+        expect(parsed.error.message.isWellFormed()).toBe(true);
+      }),
+      { numRuns: 2000, seed: 29 },
+    );
   });
 });

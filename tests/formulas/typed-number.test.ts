@@ -44,6 +44,15 @@ describe('readTypedNumber', () => {
     expect(readTypedNumber(text).ok).toBe(false);
   });
 
+  it.each(['1e-400', '0.5e-999999', '-2e-330'])('refuses %s, which a double cannot tell from zero', (text) => {
+    expect(readTypedNumber(text)).toMatchObject({ ok: false, message: expect.stringMatching(/too small/) });
+  });
+
+  it.each(['0', '-0.00', '0e-999', '0/7'])('reads %s as zero', (text) => {
+    const read = readTypedNumber(text);
+    expect(read.ok && Math.abs(read.number.value)).toBe(0);
+  });
+
   it('names the limit of characters', () => {
     expect(readTypedNumber('1'.repeat(201))).toMatchObject({ message: expect.stringMatching(/at most 200.*201/) });
   });

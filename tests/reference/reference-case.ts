@@ -6,7 +6,7 @@ export interface ComplexNumber {
   im: Exact;
 }
 
-export interface ReferenceCrossing {
+interface ReferenceCrossing {
   t: Exact;
   sign: -1 | 0 | 1;
   normalised_speed: Exact;

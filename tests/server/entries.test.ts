@@ -49,7 +49,7 @@ describe('GET /orbits/:accession', () => {
     ['RTN-0000001X.csv', { Accept: 'application/json' }],
     ['rtn-0000001x.CSV', {}],
   ])('answers CSV at %s with %j', async (path, headers) => {
-    const res = await get(path, headers as Record<string, string>);
+    const res = await get(path, headers);
     expect([res.status, res.type]).toEqual([200, 'text/csv']);
     const { data } = Papa.parse<Record<string, string>>(res.text, { header: true, skipEmptyLines: true });
     expect(data).toHaveLength(1);

@@ -174,7 +174,7 @@ describe('GET /orbits', () => {
     [{ colour: 'blue' }, '#colour'],
     [{ after: 'abc' }, '#after'],
   ])('refuses %j', async (query, pointer) => {
-    const res = await search(query as Record<string, string>);
+    const res = await search(query);
     expect([res.status, res.type, res.body.code]).toEqual([400, 'application/problem+json', 'invalid-query']);
     expect(res.body.errors[0].pointer).toBe(pointer);
   });

@@ -21,4 +21,4 @@ export function laidOut(width: number): void {
 }
 
 /** Let what was reported arrive. */
-export const settled = (): Promise<void> => act(() => new Promise((resolve) => setTimeout(resolve, 10)));
+export const settled = (): Promise<void> => act(() => new Promise<void>((resolve) => setTimeout(resolve, 10)));

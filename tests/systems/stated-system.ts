@@ -2,7 +2,7 @@ import type { SystemDocument, TypedNumber } from '@/schemas/generated/contract';
 import { evaluateDual, type Dual } from '@/tests/systems/dual';
 
 /** A typed number as a double; p/q is divided once. */
-export function doubleOf(typed: TypedNumber): number {
+function doubleOf(typed: TypedNumber): number {
   const [p = '', q = '1'] = String(typed).split('/');
   return Number(p) / Number(q);
 }

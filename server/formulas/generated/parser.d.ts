@@ -4,7 +4,6 @@ import type { ParsedNode } from '@/server/formulas/parsed-node';
 export interface SyntaxError extends Error {
   location: { start: { offset: number } };
   expected: { type: string; description?: string; text?: string }[] | null;
-  found: string | null;
 }
 export const SyntaxError: new (...parts: unknown[]) => SyntaxError;
 export function parse(text: string): ParsedNode;

@@ -1,7 +1,7 @@
 import type { GraphNode, Operation } from '@/server/numerics/expression/graph-node';
 
 /** Integer powers up to this are multiplied out by repeated squaring, so that they are safe at 0. */
-export const LARGEST_MULTIPLIED_POWER = 16;
+const LARGEST_MULTIPLIED_POWER = 16;
 
 type Unary = 'exp' | 'log' | 'sin' | 'cos' | 'asin' | 'acos' | 'atan' | 'sqrt';
 

@@ -5,7 +5,6 @@ import {
   type EndRelation,
   type LinearSegment,
 } from '@/server/numerics/periodic/condense-segments';
-import { differenceSize } from '@/server/numerics/periodic/difference-size';
 import { frobeniusNorm } from '@/server/numerics/periodic/frobenius-norm';
 import { periodDifferenceSize } from '@/server/numerics/periodic/period-difference-size';
 import { planSegments } from '@/server/numerics/periodic/plan-segments';
@@ -22,9 +21,12 @@ const RANK_CUT_OFF = 1e-9;
 
 /**
  * A family's zero singular values are zero on the orbit only: elsewhere they are the closure times the curvature of the
- * flow, which a segment with ‖M‖ < 1e3 magnifies at most by about this.
+ * flow, up to about this in close approaches (measured: Kepler of eccentricity 0.99, 1e5).
  */
-const CLOSURE_MAGNIFIED = 1e4;
+const CLOSURE_MAGNIFIED = 1e6;
+
+/** Where the closure falls no more with that, a direction was taken for free that is not: this much is then allowed for. */
+const CLOSURE_HARDLY_MAGNIFIED = 1e2;
 
 /** However far the orbit is from closing, a singular value above this is no zero. */
 const COARSEST_CUT_OFF = 1e-3;
@@ -43,6 +45,9 @@ const SAME_DERIVATIVES = 1e-13;
 
 /** A run of Newton steps that did not halve the smallest correction so far leads nowhere. */
 const PATIENCE = 6;
+
+/** Where every segment fits, a correction up to this many times what they miss by is made of rounding. */
+const ROUNDING_MAGNIFIED = 1e4;
 
 /** Newton must gain at least this factor in the last step before its corrections are small, or in that one. */
 const LEAST_GAIN = 10;
@@ -124,6 +129,16 @@ export function correctOrbit(input: CorrectionInput): CorrectedOrbit | FailedCor
   return new Corrector(input).run();
 }
 
+/** One Newton step. */
+interface Correction {
+  /** Change of point and period, in sizes. */
+  size: number;
+  /** Change of all nodes and the period, in sizes. */
+  inside: number;
+  /** Whether the step only follows rounding: every segment fitted before it. */
+  isRounding: boolean;
+}
+
 class Corrector {
   private plan: ShootingPlan;
   private nodes: Float64Array[];
@@ -132,11 +147,11 @@ class Corrector {
   private typed: ShotSegment[] = [];
   private relation: EndRelation | null = null;
   private divergenceIntegral = 0;
-  /** Sizes of the corrections so far: of point and period, and of all nodes. */
-  private readonly corrections: { size: number; inside: number }[] = [];
+  private readonly corrections: Correction[] = [];
   private residual = Infinity;
   /** Where the last Newton step began, the closure there, and how much of the step was kept. */
   private lastStep: { nodes: Float64Array[]; period: number; residual: number; share: number } | null = null;
+  private magnification = CLOSURE_MAGNIFIED;
   private steps = 0;
 
   constructor(private readonly input: CorrectionInput) {
@@ -155,7 +170,7 @@ class Corrector {
       const correction = this.improve();
       if (!Number.isFinite(correction.inside) || this.period <= 0) return this.failed(null);
       this.corrections.push(correction);
-      if (correction.size <= SMALL_CORRECTION && correction.inside <= SMALL_INSIDE) {
+      if (isSmall(correction) && correction.inside <= SMALL_INSIDE) {
         const ended = this.finish(correction.inside > SAME_DERIVATIVES);
         if (ended !== null) return ended;
       }
@@ -209,7 +224,7 @@ class Corrector {
   }
 
   private rankCutOff(): number {
-    return Math.min(COARSEST_CUT_OFF, Math.max(RANK_CUT_OFF, CLOSURE_MAGNIFIED * this.residual));
+    return Math.min(COARSEST_CUT_OFF, Math.max(RANK_CUT_OFF, this.magnification * this.residual));
   }
 
   private closing(): ClosingCorrection {
@@ -219,11 +234,16 @@ class Corrector {
     return closingCorrection(this.relation!, { gradient, value: flow.section(first) }, this.rankCutOff());
   }
 
-  /** One Newton step; returns its sizes. */
-  private improve(): { size: number; inside: number } {
-    const chain = this.condense(this.defects());
+  /** Take one Newton step. */
+  private improve(): Correction {
+    const defects = this.defects();
+    const { residual, lastStep } = this;
+    const fits = this.fits(defects);
+    if (!fits && lastStep !== null && residual > lastStep.residual / 2) this.magnification = CLOSURE_HARDLY_MAGNIFIED;
+    const chain = this.condense(defects);
     const { first, theta } = this.closing();
-    return this.move(chain.recover(first, first, theta), theta);
+    const moved = this.move(chain.recover(first, first, theta), theta);
+    return { ...moved, isRounding: fits && moved.size <= ROUNDING_MAGNIFIED * residual };
   }
 
   /** Go back half of the last step where it made the closure worse; a short one is kept. */
@@ -258,7 +278,7 @@ class Corrector {
     this.segments = this.segments.map((old, i) => (renew ? shot.segments[i]! : { ...old, end: shot.segments[i]!.end }));
     if (renew) this.divergenceIntegral = shot.divergenceIntegral;
     const defects = this.defects();
-    if (!defects.every((defect, i) => largestEntry(defect) <= this.allowed(i))) return null;
+    if (!this.fits(defects)) return null;
     if (!this.fellFast() || this.standsStill(watch)) return this.failed(null);
     if (renew) this.condense(defects);
     const { nodes, plan, period, segments, typed, divergenceIntegral, residual, steps } = this;
@@ -272,9 +292,12 @@ class Corrector {
     };
   }
 
-  private allowed(index: number): number {
-    const norm = frobeniusNorm(scaleMatrix(this.segments[index]!.monodromy!, this.input.sizes));
-    return RESIDUAL_FLOOR + RESIDUAL_ROUNDING * Number.EPSILON * norm;
+  /** Whether every segment meets the next node as nearly as its growth lets it. */
+  private fits(defects: readonly Float64Array[]): boolean {
+    return defects.every((defect, i) => {
+      const norm = frobeniusNorm(scaleMatrix(this.segments[i]!.monodromy!, this.input.sizes));
+      return largestEntry(defect) <= RESIDUAL_FLOOR + RESIDUAL_ROUNDING * Number.EPSILON * norm;
+    });
   }
 
   /** Whether Newton ended on an equilibrium, which closes after any time. */
@@ -290,20 +313,24 @@ class Corrector {
     return earlier.length > 0 && Math.min(...sizes.slice(-PATIENCE)) > Math.min(...earlier) / 2;
   }
 
-  /** Whether a correction above the small ones, or the one that followed the last of them, fell at least tenfold. */
+  /** Whether the last correction that was not small, or the one after it, fell at least tenfold or to rounding. */
   private fellFast(): boolean {
-    const sizes = this.corrections.map(({ size }) => size);
-    const last = sizes.findLastIndex((size) => size > SMALL_CORRECTION);
+    const last = this.corrections.findLastIndex((correction) => !isSmall(correction));
     if (last === -1) return true;
-    const into = sizes[last + 1];
-    if (into !== undefined && into * LEAST_GAIN <= sizes[last]!) return true;
-    return last > 0 && sizes[last]! * LEAST_GAIN <= sizes[last - 1]!;
+    const { size } = this.corrections[last]!;
+    const into = this.corrections[last + 1];
+    if (into !== undefined && (into.isRounding || into.size * LEAST_GAIN <= size)) return true;
+    return last > 0 && size * LEAST_GAIN <= this.corrections[last - 1]!.size;
   }
 
   private failed(failure: FlowFailure | null): FailedCorrection {
     const { residual, typed, steps } = this;
     return { converged: false, failure, iterations: this.corrections.length, residual, typed, steps };
   }
+}
+
+function isSmall({ size, isRounding }: Correction): boolean {
+  return size <= SMALL_CORRECTION || isRounding;
 }
 
 function largestEntry(x: Float64Array): number {

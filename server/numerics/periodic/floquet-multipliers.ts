@@ -2,6 +2,7 @@ import { eigenvalues, type Complex } from '@/server/numerics/linear/eigenvalues'
 import { factorQr } from '@/server/numerics/linear/factor-qr';
 import { identityMatrix } from '@/server/numerics/linear/identity-matrix';
 import { multiplyMatrices } from '@/server/numerics/linear/multiply-matrices';
+import { orthonormalise } from '@/server/numerics/linear/orthonormalise';
 
 /** Sweeps over the orbit; moduli that differ by a factor 2 are told apart to rounding in 50. */
 const MAX_SWEEPS = 60;
@@ -26,6 +27,7 @@ export interface Multiplier {
  *
  * @param pieces  N ≥ 1 matrices n × n, row-major, in order of time, in sizes; each well conditioned (below about 1e8).
  * @param n       dimension.
+ * @param coarse  the same product in fewer factors, which may be badly conditioned: a start for the sweeps, nothing else.
  * @returns       n multipliers, largest modulus first, conjugates adjacent with positive imaginary part first; null when
  *                the eigenvalues of a block cannot be found or an entry is not finite.
  *
@@ -34,22 +36,31 @@ export interface Multiplier {
  * Source: QR sweeps as for Lyapunov exponents (common practice); blocks as in the periodic Schur form of A. W. Bojanczyk,
  *         G. H. Golub, P. Van Dooren, SPIE 1770 (1992) 31–42 (from memory), which this does not compute.
  */
-export function floquetMultipliers(pieces: readonly Float64Array[], n: number): Multiplier[] | null {
+export function floquetMultipliers(
+  pieces: readonly Float64Array[],
+  n: number,
+  coarse: readonly Float64Array[] = pieces,
+): Multiplier[] | null {
   if (n === 0) return [];
-  let basis = startingBasis(n);
-  let best: Sweep | null = null;
-  let settled = 0;
-  for (let sweep = 0; sweep < MAX_SWEEPS && settled < 2; sweep += 1) {
-    const result = sweepOnce(pieces, basis, n);
-    if (result === null) return null;
-    const cuts = cutsOf(result.b, n);
-    const before = best === null ? 0 : cutsOf(best.b, n).length;
-    settled = cuts.length === n - 1 && before === n - 1 ? settled + 1 : 0;
-    best = result;
-    basis = result.basis;
-  }
-  const found = best === null ? null : multipliersOf(best, n);
+  const start =
+    coarse === pieces ? startingBasis(n) : (sweepUntilSeparated(coarse, startingBasis(n), n)?.basis ?? null);
+  const last = start === null ? null : sweepUntilSeparated(pieces, start, n);
+  const found = last === null ? null : multipliersOf(last, n);
   return found === null ? null : found.sort((a, b) => b.logModulus - a.logModulus);
+}
+
+/** Sweep until all multipliers are separated as far as rounding lets them, or the sweeps are used up. */
+function sweepUntilSeparated(pieces: readonly Float64Array[], start: Float64Array, n: number): Sweep | null {
+  let best: Sweep | null = null;
+  let before = Infinity;
+  for (let sweep = 0; sweep < MAX_SWEEPS; sweep += 1) {
+    best = sweepOnce(pieces, best?.basis ?? start, n);
+    if (best === null) return null;
+    const leak = Math.max(0, ...leaksOf(best.b, n));
+    if (leak <= SEPARATED && leak > before / 2) break;
+    before = leak;
+  }
+  return best;
 }
 
 interface Sweep {
@@ -71,9 +82,10 @@ function sweepOnce(pieces: readonly Float64Array[], start: Float64Array, n: numb
   for (const piece of pieces) {
     const z = multiplyMatrices(piece, basis, n, n);
     if (!z.every(Number.isFinite)) return null;
-    const { q, r } = factorQr(z, n, n);
+    const r = new Float64Array(n * n);
+    orthonormalise(z, r, n);
     triangles.push(r);
-    basis = q;
+    basis = z;
   }
   const b = new Float64Array(n * n);
   for (let i = 0; i < n; i += 1) {
@@ -84,21 +96,22 @@ function sweepOnce(pieces: readonly Float64Array[], start: Float64Array, n: numb
   return { basis, b, triangles };
 }
 
-/** Indices j at which B is block diagonal: nothing leaks between columns below j and columns from j on. */
-function cutsOf(b: Float64Array, n: number): number[] {
-  const cuts: number[] = [];
+/** For j = 1 … n − 1: the largest entry of B that leads between columns below j and columns from j on. */
+function leaksOf(b: Float64Array, n: number): number[] {
+  const leaks: number[] = [];
   for (let j = 1; j < n; j += 1) {
     let leak = 0;
     for (let i = j; i < n; i += 1) {
       for (let k = 0; k < j; k += 1) leak = Math.max(leak, Math.abs(b[i * n + k]!), Math.abs(b[k * n + i]!));
     }
-    if (leak <= SEPARATED) cuts.push(j);
+    leaks.push(leak);
   }
-  return cuts;
+  return leaks;
 }
 
 function multipliersOf({ b, triangles }: Sweep, n: number): Multiplier[] | null {
-  const edges = [0, ...cutsOf(b, n), n];
+  const cuts = leaksOf(b, n).flatMap((leak, index) => (leak <= SEPARATED ? [index + 1] : []));
+  const edges = [0, ...cuts, n];
   const all: Multiplier[] = [];
   for (let e = 0; e + 1 < edges.length; e += 1) {
     const from = edges[e]!;

@@ -5,7 +5,7 @@ import { type Shot, type ShotSegment } from '@/server/numerics/periodic/shoot';
 import { type ShootingPlan } from '@/server/numerics/periodic/shooting-plan';
 
 /** Growth above which an orbit is shot in several segments, each below it. */
-export const SEGMENT_NORM = 1e3;
+const SEGMENT_NORM = 1e3;
 
 /** A single shot cut into segments. */
 export interface CutShot {

@@ -93,7 +93,7 @@ class Run {
       duration: share.to * period - begin,
       variations,
       maxSteps: Math.max(1, maxSteps - this.steps),
-      ...(watch === undefined ? {} : { onStep: (step: TaylorStep) => void watch.onStep(step) }),
+      ...(watch === undefined ? {} : { onStep: (step: TaylorStep) => watch.onStep(step) }),
       ...(shouldStop === undefined ? {} : { shouldStop }),
     });
     this.steps += result.steps;

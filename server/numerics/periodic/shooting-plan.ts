@@ -1,5 +1,5 @@
 /** One segment of a periodic orbit: between two shooting nodes. */
-export interface PlannedSegment {
+interface PlannedSegment {
   /** Borders of its pieces as shares of the period, ascending; the first is the segment's start, the last its end. */
   borders: number[];
 }

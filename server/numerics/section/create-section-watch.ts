@@ -1,4 +1,4 @@
-import { createExtentWatch, type Extent } from '@/server/numerics/section/create-extent-watch';
+import { createExtentWatch, type Extent, type ExtentWatch } from '@/server/numerics/section/create-extent-watch';
 import { horner } from '@/server/numerics/section/horner';
 import { isolateRoots, type RootInterval } from '@/server/numerics/section/isolate-roots';
 import { polishRoot } from '@/server/numerics/section/polish-root';
@@ -9,7 +9,7 @@ import { type TaylorStep } from '@/server/numerics/taylor/flow';
 const NEAR = 1e-3;
 
 /** Where a run begins that the watch is to follow. */
-export interface WatchStart {
+interface WatchStart {
   /** Time of its start since the orbit's start, as a sum of two doubles. */
   time: number;
   timeLow: number;
@@ -46,40 +46,73 @@ export interface SectionWatch {
  * Cost: 2·order additions for most steps, plus the extents.
  */
 export function createSectionWatch(dimension: number): SectionWatch {
-  const extents = createExtentWatch(dimension);
-  const zeros: SectionZero[] = [];
-  const nearMisses: NearMiss[] = [];
-  let start: WatchStart = { time: 0, timeLow: 0, onSection: false };
-  let isFirst = true;
-  let side: 1 | -1 | 0 = 0;
-  let largest = 0;
-  let counted = 0;
-  let unit = new Float64Array(0);
+  return new StepWatch(dimension);
+}
 
-  function record(step: TaylorStep, s: number, direction: 1 | -1 | 0): void {
-    zeros.push({ ...timeOf(step, s, start), state: stateAt(step, s, dimension), direction });
-    if (direction === 1) counted += 1;
+class StepWatch implements SectionWatch {
+  readonly zeros: SectionZero[] = [];
+  readonly nearMisses: NearMiss[] = [];
+  private readonly extents: ExtentWatch;
+  private start: WatchStart = { time: 0, timeLow: 0, onSection: false };
+  private isFirst = true;
+  /** Sign of u just before the present place. */
+  private side: 1 | -1 | 0 = 0;
+  /** Largest |u| at the start of a step so far. */
+  private largest = 0;
+  private rises = 0;
+  private unit = new Float64Array(0);
+
+  constructor(private readonly dimension: number) {
+    this.extents = createExtentWatch(dimension);
   }
 
-  function findZeros(step: TaylorStep, c: Float64Array): void {
-    const deflated = isFirst && start.onSection ? c.subarray(1) : c;
+  begin(start: WatchStart): void {
+    this.start = start;
+    this.isFirst = true;
+  }
+
+  onStep(step: TaylorStep): void {
+    this.extents.onStep(step);
+    if (this.unit.length !== step.section.length) this.unit = new Float64Array(step.section.length);
+    const c = unitCoefficients(step, this.unit);
+    this.findZeros(step, c);
+    this.findNearMisses(step, c);
+    this.isFirst = false;
+  }
+
+  counted(): number {
+    return this.rises;
+  }
+
+  extent(): Extent {
+    return this.extents.extent();
+  }
+
+  private record(step: TaylorStep, s: number, direction: 1 | -1 | 0): void {
+    this.zeros.push({ ...timeOf(step, s, this.start), state: stateAt(step, s, this.dimension), direction });
+    if (direction === 1) this.rises += 1;
+  }
+
+  private findZeros(step: TaylorStep, c: Float64Array): void {
+    const isDeflated = this.isFirst && this.start.onSection;
+    const deflated = isDeflated ? c.subarray(1) : c;
     const first = firstSign(deflated);
-    if (isFirst && start.onSection) side = first;
-    if (side !== 0 && first !== 0 && first !== side) record(step, 0, first);
+    if (isDeflated) this.side = first;
+    if (this.side !== 0 && first !== 0 && first !== this.side) this.record(step, 0, first);
     for (const interval of isolateRoots(deflated)) {
       const { s, direction } = zeroIn(deflated, interval);
-      record(step, s, direction);
+      this.record(step, s, direction);
     }
     const end = horner(deflated, 1);
-    if (end !== 0) side = end > 0 ? 1 : -1;
-    else if (side === 0) side = first;
+    if (end !== 0) this.side = end > 0 ? 1 : -1;
+    else if (this.side === 0) this.side = first;
   }
 
-  function findNearMisses(step: TaylorStep, c: Float64Array): void {
+  private findNearMisses(step: TaylorStep, c: Float64Array): void {
     let size = 0;
     for (let k = 0; k < c.length; k += 1) size += Math.abs(c[k]!);
-    largest = Math.max(largest, Math.abs(c[0]!));
-    const near = NEAR * Math.max(size, largest);
+    this.largest = Math.max(this.largest, Math.abs(c[0]!));
+    const near = NEAR * Math.max(size, this.largest);
     if (2 * Math.abs(c[0]!) - size > near) return;
     const slope = new Float64Array(c.length - 1);
     for (let k = 1; k < c.length; k += 1) slope[k - 1] = k * c[k]!;
@@ -87,29 +120,11 @@ export function createSectionWatch(dimension: number): SectionWatch {
       const { s } = zeroIn(slope, interval);
       const value = horner(c, s);
       if (Math.abs(value) > near) continue;
-      const { time } = timeOf(step, s, start);
-      nearMisses.push({ time, state: stateAt(step, s, dimension), value, curvature: curvatureAt(c, s, step.h) });
+      const { time } = timeOf(step, s, this.start);
+      const state = stateAt(step, s, this.dimension);
+      this.nearMisses.push({ time, state, value, curvature: curvatureAt(c, s, step.h) });
     }
   }
-
-  return {
-    zeros,
-    nearMisses,
-    counted: () => counted,
-    extent: extents.extent,
-    begin(next) {
-      start = next;
-      isFirst = true;
-    },
-    onStep(step) {
-      extents.onStep(step);
-      if (unit.length !== step.section.length) unit = new Float64Array(step.section.length);
-      const c = unitCoefficients(step, unit);
-      findZeros(step, c);
-      findNearMisses(step, c);
-      isFirst = false;
-    },
-  };
 }
 
 /** Coefficients of u in the step fraction s ∈ [0, 1], written to c. */

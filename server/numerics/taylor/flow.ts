@@ -1,23 +1,10 @@
-import type { Expression } from '@/server/numerics/expression/expression';
 import { staticValues } from '@/server/numerics/expression/static-values';
+import type { FlowDefinition } from '@/server/numerics/taylor/flow-definition';
 import { type FlowResult, type IntegrateOptions, integrate } from '@/server/numerics/taylor/integrate';
 import { type PreparedFlow, preparedFlow } from '@/server/numerics/taylor/prepared-flow';
 
-export type { FlowResult, IntegrateOptions, TaylorStep } from '@/server/numerics/taylor/integrate';
-
-/** A system with one set of parameters and one section. */
-export interface FlowDefinition {
-  variables: readonly { name: string; modulus: number | null }[];
-  parameters: readonly { name: string; value: number }[];
-  /** In order: each may use the ones before it. */
-  definitions: readonly { name: string; expression: Expression }[];
-  /** In the order of the variables. */
-  equations: readonly Expression[];
-  /** u: the section is where it vanishes. */
-  section: Expression;
-  /** Evaluated at points only: letters, invariants. */
-  outputs: readonly Expression[];
-}
+export type { FlowDefinition } from '@/server/numerics/taylor/flow-definition';
+export type { FlowResult, TaylorStep } from '@/server/numerics/taylor/integrate';
 
 /** The flow of a system. Not re-entrant: a callback of `integrate` must not integrate with the same flow. */
 export interface Flow {

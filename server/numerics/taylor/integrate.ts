@@ -8,7 +8,7 @@ import { StateScales } from '@/server/numerics/taylor/state-scales';
 /** A step below this part of the time reached or asked for is a collapse: the solution leaves its domain. */
 const COLLAPSE = 1e-14;
 /** A coordinate beyond this many times 1 + |x0| has escaped. */
-export const ESCAPE_FACTOR = 1e6;
+const ESCAPE_FACTOR = 1e6;
 
 /** One Taylor step. The arrays are views into the kernel, valid only during the callback. */
 export interface TaylorStep {
@@ -85,8 +85,11 @@ class Integration {
   private readonly state: Float64Array;
   private readonly varied: Float64Array;
   private readonly scales: StateScales;
-  /** Whole moduli taken off each angle. */
+  /** Coordinates that are angles, and the whole moduli taken off each coordinate. */
+  private readonly angles: readonly { index: number; modulus: number }[];
   private readonly turns: Float64Array;
+  /** Views made once: making one costs as much as a small field. */
+  private readonly series: { state: Float64Array; section: Float64Array; divergence: Float64Array };
   private readonly bound: number;
   private t = 0;
   private tLow = 0;
@@ -105,7 +108,14 @@ class Integration {
     this.varied = new Float64Array(this.n * this.kernel.stride);
     if (this.kernel.stride > 0) for (let i = 0; i < this.n; i++) this.varied[i * this.kernel.stride + i] = 1;
     this.scales = new StateScales(this.state, moduli);
+    this.angles = moduli.flatMap((modulus, index) => (modulus === null ? [] : [{ index, modulus }]));
     this.turns = new Float64Array(this.n);
+    const { memory, seriesStart, order } = this.kernel;
+    this.series = {
+      state: memory.subarray(seriesStart, seriesStart + this.n * (order + 1)),
+      section: this.seriesOf(this.n),
+      divergence: this.seriesOf(this.n + 1),
+    };
     this.bound = ESCAPE_FACTOR * (1 + this.state.reduce((size, x) => Math.max(size, Math.abs(x)), 0));
   }
 
@@ -144,17 +154,9 @@ class Integration {
   }
 
   private view(h: number): TaylorStep {
-    const { memory, seriesStart, order } = this.kernel;
-    const width = order + 1;
-    this.setOrderZero(this.unwrapped());
-    return {
-      index: this.steps,
-      t: this.t,
-      tLow: this.tLow,
-      h,
-      state: memory.subarray(seriesStart, seriesStart + this.n * width),
-      section: this.seriesOf(this.n),
-    };
+    if (this.angles.length > 0) this.setOrderZero(this.unwrapped());
+    const { state, section } = this.series;
+    return { index: this.steps, t: this.t, tLow: this.tLow, h, state, section };
   }
 
   /** Coefficients of a root; a static one is constant along the flow. */
@@ -169,9 +171,9 @@ class Integration {
   }
 
   private take(h: number): void {
-    this.setOrderZero(this.state);
+    if (this.angles.length > 0) this.setOrderZero(this.state);
     advance(this.kernel, h, { state: this.state, varied: this.varied });
-    const divergence = this.seriesOf(this.n + 1);
+    const { divergence } = this.series;
     let integral = 0;
     for (let k = this.kernel.order; k >= 0; k--) integral = integral * h + divergence[k]! / (k + 1);
     this.divergence += integral * h;
@@ -185,17 +187,18 @@ class Integration {
   }
 
   private wrapAngles(): void {
-    this.parts.moduli.forEach((modulus, i) => {
-      if (modulus === null) return;
-      const turns = Math.round(this.state[i]! / modulus);
-      this.state[i]! -= turns * modulus;
-      this.turns[i]! += turns;
-    });
+    for (const { index, modulus } of this.angles) {
+      const turns = Math.round(this.state[index]! / modulus);
+      this.state[index]! -= turns * modulus;
+      this.turns[index]! += turns;
+    }
   }
 
   /** The state with its angles running on. */
   private unwrapped(): Float64Array {
-    return this.state.map((x, i) => x + this.turns[i]! * (this.parts.moduli[i] ?? 0));
+    const state = this.state.slice();
+    for (const { index, modulus } of this.angles) state[index]! += this.turns[index]! * modulus;
+    return state;
   }
 
   private setOrderZero(state: Float64Array): void {
@@ -204,7 +207,10 @@ class Integration {
   }
 
   private hasEscaped(): boolean {
-    return this.state.some((x, i) => this.parts.moduli[i] === null && !(Math.abs(x) <= this.bound));
+    for (let i = 0; i < this.n; i++) {
+      if (!(Math.abs(this.state[i]!) <= this.bound) && this.parts.moduli[i] === null) return true;
+    }
+    return false;
   }
 
   private success(): FlowResult {

@@ -28,8 +28,9 @@ export function nameTrouble(graph: Graph, tape: Tape, kernel: JetKernel): string
     const operand = guarded(step);
     if (operand === null || operand < 0) continue;
     const value = Math.abs(kernel.memory[kernel.seriesStart + operand * (kernel.order + 1)]!);
-    if (value < smallest || Number.isNaN(value)) {
-      smallest = Number.isNaN(value) ? 0 : value;
+    // An operand that is not a number is what came of the trouble, not where it began.
+    if (value < smallest) {
+      smallest = value;
       const node = tape.steps[operand]!.node;
       words = `${graph.labels.get(node) ?? rootOf(graph, node) ?? partOf(step)} = 0`;
     }

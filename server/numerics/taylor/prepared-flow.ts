@@ -3,7 +3,7 @@ import { deriveNode } from '@/server/numerics/expression/derive-node';
 import { Graph } from '@/server/numerics/expression/graph';
 import { isAffine } from '@/server/numerics/expression/is-affine';
 import { makeTape, type Tape } from '@/server/numerics/expression/tape';
-import type { FlowDefinition } from '@/server/numerics/taylor/flow';
+import type { FlowDefinition } from '@/server/numerics/taylor/flow-definition';
 import { InterpretedKernel } from '@/server/numerics/taylor/interpreted-kernel';
 import type { JetKernel } from '@/server/numerics/taylor/jet-kernel';
 import { makeWasmKernel } from '@/server/numerics/taylor/wasm-kernel';
@@ -12,7 +12,7 @@ import { makeWasmKernel } from '@/server/numerics/taylor/wasm-kernel';
  * Order of the Taylor series: ⌈−½ ln ε⌉ + 1 for ε = 10⁻¹⁶.
  * Source: Jorba and Zou (2005), section 3; measured here to be the knee of cost against error.
  */
-export const TAYLOR_ORDER = 20;
+const TAYLOR_ORDER = 20;
 /** Nodes of field and section together, after equal subexpressions have become one. */
 export const SHARED_NODES_LIMIT = 2000;
 /** Flows whose code is kept. */
@@ -45,8 +45,9 @@ const kept = new Map<string, PreparedFlow>();
 /** The prepared flow of a definition; parameters' values play no part in it. */
 export function preparedFlow(definition: FlowDefinition): PreparedFlow {
   const { variables, parameters, definitions, equations, section, outputs } = definition;
-  const names = [variables.map(({ name }) => name), parameters.map(({ name }) => name)];
-  const key = JSON.stringify([names, definitions, equations, section, outputs]);
+  const names = [variables, parameters].map((named) => named.map(({ name }) => name).join(' '));
+  const parts = [definitions, equations, section, ...outputs].map(textOf);
+  const key = [...names, ...parts].join('\n');
   const prepared = kept.get(key) ?? prepare(definition);
   // Last used stands last.
   kept.delete(key);
@@ -56,6 +57,15 @@ export function preparedFlow(definition: FlowDefinition): PreparedFlow {
     kept.delete(oldest);
   }
   return prepared;
+}
+
+/** The text of a part of a definition; the same objects come again and again. */
+const texts = new WeakMap<object, string>();
+
+function textOf(part: object): string {
+  const text = texts.get(part) ?? JSON.stringify(part);
+  texts.set(part, text);
+  return text;
 }
 
 function prepare(definition: FlowDefinition): PreparedFlow {

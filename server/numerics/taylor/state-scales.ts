@@ -20,9 +20,9 @@ export class StateScales {
 
   /** Take note of a state reached by a step. */
   see(state: Float64Array, h: number): void {
-    state.forEach((x, i) => {
-      this.seen[i] = this.moduli[i] ?? Math.max(this.seen[i]!, Math.abs(x));
-    });
+    for (let i = 0; i < state.length; i++) {
+      if (this.moduli[i] === null) this.seen[i] = Math.max(this.seen[i]!, Math.abs(state[i]!));
+    }
     this.lastStep = h;
   }
 

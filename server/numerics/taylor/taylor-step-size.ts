@@ -1,5 +1,5 @@
 /** Fraction of the estimated convergence radius that is optimal for a Taylor step: e⁻². */
-export const OPTIMAL_FRACTION = Math.exp(-2);
+const OPTIMAL_FRACTION = Math.exp(-2);
 
 /**
  * The radius of convergence of a series as its last two coefficients let expect:

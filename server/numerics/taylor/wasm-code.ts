@@ -2,7 +2,7 @@
 export type Code = readonly number[];
 
 /** Unsigned LEB128. */
-export function unsigned(value: number): number[] {
+function unsigned(value: number): number[] {
   const bytes: number[] = [];
   let rest = value;
   do {
@@ -14,7 +14,7 @@ export function unsigned(value: number): number[] {
 }
 
 /** Signed LEB128 of a 32-bit integer. */
-export function signed(value: number): number[] {
+function signed(value: number): number[] {
   const bytes: number[] = [];
   let rest = value;
   for (;;) {

@@ -1,3 +1,4 @@
+import Fuse from 'fuse.js';
 import { createSearchParser } from '@/features/catalogue/parse-search-line';
 import { removeTerm, replaceTerm } from '@/features/catalogue/edit-search-line';
 import { searchFilter } from '@/features/catalogue/search-filter';
@@ -11,7 +12,7 @@ const systems: SearchableSystem[] = [
   { slug: 'cr3bp-planar', name: 'Restricted three-body problem, planar', parameters: ['mu'], letters: [] },
   { slug: 'cr3bp-spatial', name: 'Restricted three-body problem, spatial', parameters: ['mu'], letters: [] },
 ];
-const parse = createSearchParser(systems);
+const parse = createSearchParser(systems, Fuse);
 const kinds = (text: string) => parse(text).map(({ start: _start, end: _end, ...meaning }) => meaning);
 const asked = (text: string) => searchFilter(parse(text));
 
@@ -19,7 +20,7 @@ describe('the search line', () => {
   it('reads a system, returns and a range of periods', () => {
     expect(kinds('lorenz 9 returns 6.6 to 6.75')).toEqual([
       { kind: 'system', slug: 'lorenz', name: 'Lorenz' },
-      { kind: 'returns', value: '9' },
+      { kind: 'returns', min: '9', max: '9' },
       { kind: 'period-range', min: '6.6', max: '6.75' },
     ]);
   });
@@ -35,6 +36,11 @@ describe('the search line', () => {
     ['period up to 6.75', { periodMax: '6.75' }],
     ['returns 9', { returns: '9' }],
     ['1 return', { returns: '1' }],
+    ['3 to 5 returns', { returns: '3..5' }],
+    ['returns 3..5', { returns: '3..5' }],
+    ['contains AAB', { itineraryContains: 'AAB' }],
+    ['stable or saddle', { stability: 'stable,saddle' }],
+    ['refined', { evidence: 'refined,proved' }],
     ['AAB', { itinerary: 'AAB' }],
     ['itinerary 011', { itinerary: '011' }],
     ['saddle', { stability: 'saddle' }],

@@ -1,4 +1,4 @@
-import { Problem } from '@/server/errors';
+import { type Problem } from '@/server/errors';
 import { readSearch } from '@/server/search/read-search';
 
 const refusal = (query: Record<string, unknown>): Problem => {

@@ -3,22 +3,29 @@ import { multiplyMatrices } from '@/server/numerics/linear/multiply-matrices';
 import { singularValues } from '@/server/numerics/linear/singular-values';
 import { type EndRelation } from '@/server/numerics/periodic/condense-segments';
 
+/** The invariant subspace of the multipliers that equal 1. */
+export interface UnitSpace {
+  /** Its dimension, the algebraic multiplicity of 1: 0 … n. */
+  size: number;
+  /** Orthonormal basis, n × size, row-major. */
+  basis: Float64Array;
+}
+
 /**
- * Count the multipliers that equal 1, with their algebraic multiplicity, by ranks and not by eigenvalues.
+ * Find the multipliers that equal 1, with their algebraic multiplicity, by ranks and not by eigenvalues.
  *
  * ker (M − I) ⊂ ker (M − I)² ⊂ … is built step by step: with P ξ + Q η = 0 meaning η = M ξ,
  * (M − I) w = v is (P + Q) w = −Q v, so the next kernel is that of [P + Q | Q V], V a basis of the last one.
  *
  * @param relation  the chain's relation between its ends, rows [P Q] orthonormal.
  * @param cutOff    singular values at or below this count as zero; the rows have length 1, so it is a pure number.
- * @returns         0 … n.
  *
  * Accuracy: a multiplier nearer to 1 than about cutOff·(size of M) counts as 1.
  * Cost: at most n singular value decompositions of n × 2n.
  * Source: the staircase of V. N. Kublanovskaya (1966) and G. H. Golub, J. H. Wilkinson, SIAM Review 18 (1976) 578–619
  *         (from memory), applied to the pencil P + λ Q instead of M.
  */
-export function unitMultiplicity({ p, q }: Pick<EndRelation, 'p' | 'q'>, cutOff: number): number {
+export function unitSpace({ p, q }: Pick<EndRelation, 'p' | 'q'>, cutOff: number): UnitSpace {
   const n = Math.sqrt(p.length);
   const sum = p.map((entry, k) => entry + q[k]!);
   let basis = new Float64Array(0);
@@ -26,11 +33,11 @@ export function unitMultiplicity({ p, q }: Pick<EndRelation, 'p' | 'q'>, cutOff:
   for (let level = 0; level < n; level += 1) {
     const next = nextKernel({ sum, image: multiplyMatrices(q, basis, n, n), n, size, cutOff });
     const grown = next.length / n;
-    if (grown <= size) return size;
+    if (grown <= size) break;
     basis = next;
     size = grown;
   }
-  return size;
+  return { size, basis };
 }
 
 /** Orthonormal basis (n × d, row-major) of the w with (P + Q) w in the span of the image's columns. */
