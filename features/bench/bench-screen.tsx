@@ -43,7 +43,7 @@ export function BenchScreen({ system, from }: BenchScreenProps) {
 
 /** The form begins with the entry asked for, else with what was kept, else empty. */
 function firstDraft(systems: readonly System[], slug: string | null, entry: Entry | null): OrbitDraft {
-  if (entry) return draftOfBody(entry.submitted);
+  if (entry) return draftOfBody({ ...entry.submitted });
   const chosen = systems.find((one) => one.slug === slug);
   return keptDraft(slug) ?? (chosen ? draftOfSystem(chosen) : emptyDraft);
 }

@@ -62,8 +62,7 @@ function UnderWay({ check }: { check: Check }) {
   return (
     <View role="status" style={{ gap: space.one }}>
       <View style={{ flexDirection: 'row', alignItems: 'center', gap: space.one }}>
-        <BarlineState state={checkState === 'queued' ? 'queued' : 'checking'} height={24} />
-        <Text tone="ochre">{checkState === 'queued' ? 'queued' : 'checking'}</Text>
+        <BarlineState state={checkState === 'queued' ? 'queued' : 'checking'} />
       </View>
       <Text>
         {progress

@@ -58,8 +58,8 @@ export async function startWholeServer(environment: Record<string, string> = {})
   });
   let printed = '';
   const collect = (chunk: Buffer): void => void (printed += chunk.toString());
-  child.stdout.on('data', collect);
-  child.stderr.on('data', collect);
+  child.stdout?.on('data', collect);
+  child.stderr?.on('data', collect);
   const stop = async (): Promise<void> => {
     await end(child);
     const outside = /Making a private PostgreSQL database in (\S+)/.exec(printed)?.[1];
