@@ -15,7 +15,7 @@ const pathOf = (id: string, more = '') => `/checks/${encodeURIComponent(id)}${mo
 export const isOver = (check: Pick<Check, 'checkState'>): boolean =>
   check.checkState !== 'queued' && check.checkState !== 'running';
 
-export const checkQueries = {
+const checkQueries = {
   root,
   one: (id: string) =>
     queryOptions({

@@ -35,48 +35,59 @@ function hindrance({ report, reportIsCurrent, checkState }: Submission): string 
   return reportIsCurrent ? null : 'Checked by an older engine: check again first.';
 }
 
-/** Accept, return or decline, with a reason that is kept for ever. */
-export function DecisionForm({ submission, etag }: { submission: Submission; etag: string | null }) {
+interface Props {
+  submission: Submission;
+  etag: string | null;
+}
+
+/** What a curator has chosen and written, and the recording of it. */
+function useDecision({ submission, etag }: Props) {
   const decide = useDecideSubmission();
   const claim = useClaimSubmission();
   const announce = useAnnounce();
   const [choice, setChoice] = useState<Choice | null>(null);
   const [reason, setReason] = useState<ReasonCode>('does-not-close');
   const [comment, setComment] = useState('');
-  const isMine = submission.isMine;
-  usePageKeys(
-    isMine
-      ? {}
-      : {
-          a: () => setChoice('accept'),
-          r: () => setChoice('return'),
-          d: () => setChoice('decline'),
-          c: () => claim.mutate({ id: submission.id }),
-        },
-  );
-  if (isMine) return <Text>You own this submission; another curator decides.</Text>;
-  const missing =
-    choice === null
-      ? 'Choose first.'
-      : choice !== 'accept' && comment.trim() === ''
-        ? 'A reason in words is needed.'
-        : null;
+  const { id } = submission;
+  const needsWords = choice !== 'accept' && comment.trim() === '';
+  const missing = choice === null ? 'Choose first.' : needsWords ? 'A reason in words is needed.' : null;
   const record = () => {
-    if (missing || choice === null) return;
+    if (missing !== null || choice === null || decide.isPending) return;
     const decision: Decision = {
       decision: choice,
       ...(choice !== 'accept' && { reason }),
       ...(comment.trim() && { comment }),
     };
-    decide.mutate(
-      { id: submission.id, etag, decision },
-      { onSuccess: ({ data }) => announce(data.accession ? `In the catalogue as ${data.accession}` : 'Recorded') },
-    );
+    const said = (accession: string | null) => (accession ? `In the catalogue as ${accession}` : 'Recorded');
+    decide.mutate({ id, etag, decision }, { onSuccess: ({ data }) => announce(said(data.accession)) });
   };
-  const onComment = (text: string) => {
-    if (comment === '' && submission.claim === null) claim.mutate({ id: submission.id });
+  const write = (text: string) => {
+    // The first keystroke takes the lease.
+    if (comment === '' && submission.claim === null) claim.mutate({ id });
     setComment(text);
   };
+  return {
+    decide,
+    claim: () => claim.mutate({ id }),
+    choice,
+    setChoice,
+    reason,
+    setReason,
+    comment,
+    write,
+    missing,
+    record,
+  };
+}
+
+/** Accept, return or decline, with a reason that is kept for ever. */
+export function DecisionForm({ submission, etag }: Props) {
+  const form = useDecision({ submission, etag });
+  const { choice, setChoice, comment, decide, missing, record } = form;
+  const { isMine } = submission;
+  const select = (one: Choice) => () => setChoice(one);
+  usePageKeys(isMine ? {} : { a: select('accept'), r: select('return'), d: select('decline'), c: form.claim });
+  if (isMine) return <Text>You own this submission; another curator decides.</Text>;
   return (
     <Form name="Decision" onSubmit={record}>
       <View style={{ gap: space.two }}>
@@ -84,30 +95,14 @@ export function DecisionForm({ submission, etag }: { submission: Submission; eta
         <Text size={14} tone="muted">
           On revision {submission.revision}.
         </Text>
-        <RadioGroup<Choice>
-          legend="Decision"
-          hideLegend
-          value={choice}
-          onChange={setChoice}
-          options={[
-            {
-              value: 'accept',
-              label: 'Accept',
-              hint: 'enters the catalogue with the next number',
-              keyHint: 'a',
-              disabledBecause: hindrance(submission),
-            },
-            { value: 'return', label: 'Return', hint: 'edit and send again; reason needed', keyHint: 'r' },
-            { value: 'decline', label: 'Decline', hint: 'reason needed', keyHint: 'd' },
-          ]}
-        />
+        <Choices submission={submission} choice={choice} onChoose={setChoice} />
         {choice === 'return' || choice === 'decline' ? (
-          <Select label="Reason" value={reason} onChange={setReason} options={reasons} />
+          <Select label="Reason" value={form.reason} onChange={form.setReason} options={reasons} />
         ) : null}
         <TextArea
           label="Reason, shown to the contributor and kept for ever"
           value={comment}
-          onChangeText={onComment}
+          onChangeText={form.write}
           onKeyDown={(event) => {
             if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) record();
           }}
@@ -121,10 +116,32 @@ export function DecisionForm({ submission, etag }: { submission: Submission; eta
           {choice ? buttons[choice] : 'Record'}
         </Button>
         <Text size={13} tone="muted">
-          <Text mono>Ctrl ↵</Text> records. If the submission changed meanwhile, nothing is recorded and you see what
-          changed.
+          <Text mono>Ctrl ↵</Text> records. If the submission changed meanwhile, nothing is recorded.
         </Text>
       </View>
     </Form>
+  );
+}
+
+interface ChoicesProps {
+  submission: Submission;
+  choice: Choice | null;
+  onChoose: (choice: Choice) => void;
+}
+
+function Choices({ submission, choice, onChoose }: ChoicesProps) {
+  const hint = 'enters the catalogue with the next number';
+  return (
+    <RadioGroup<Choice>
+      legend="Decision"
+      hideLegend
+      value={choice}
+      onChange={onChoose}
+      options={[
+        { value: 'accept', label: 'Accept', hint, keyHint: 'a', disabledBecause: hindrance(submission) },
+        { value: 'return', label: 'Return', hint: 'edit and send again; reason needed', keyHint: 'r' },
+        { value: 'decline', label: 'Decline', hint: 'reason needed', keyHint: 'd' },
+      ]}
+    />
   );
 }

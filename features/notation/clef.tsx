@@ -37,13 +37,3 @@ export function Clef({ multipliers, radius, x, y }: ClefProps) {
     </g>
   );
 }
-
-/** The same circle as a picture of its own. */
-export function SmallUnitCircle({ multipliers, radius }: Pick<ClefProps, 'multipliers' | 'radius'>) {
-  const half = radius * 2.8;
-  return (
-    <svg width={2 * half} height={2 * radius + 8} aria-hidden>
-      <Clef multipliers={multipliers} radius={radius} x={half} y={radius + 4} />
-    </svg>
-  );
-}

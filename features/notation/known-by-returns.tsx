@@ -2,7 +2,7 @@ import { View } from 'react-native';
 import { colour, LinkText, Text } from '@/features/ui';
 import { formatCount } from './format-count';
 
-export interface KnownByReturnsRow {
+interface KnownByReturnsRow {
   returns: number;
   known: number;
   /** What symbolic dynamics allows; `null` where that is not known. */

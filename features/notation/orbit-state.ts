@@ -19,7 +19,7 @@ export type OrbitState =
   | 'failed';
 
 /** Shape of the closing barline. */
-export type Barline = 'dashed' | 'thin' | 'two-thin' | 'thin-thick' | 'repeat' | 'broken' | 'none';
+type Barline = 'dashed' | 'thin' | 'two-thin' | 'thin-thick' | 'repeat' | 'broken' | 'none';
 
 interface StateLook {
   word: string;

@@ -42,7 +42,7 @@ const LEAST_MARK = 2;
 /** No mark this close to a dot or a letter, px. */
 const CLEAR = 8;
 /** Crossings drawn; of more an even sample. */
-export const MOST_CROSSINGS = 20_000;
+const MOST_CROSSINGS = 20_000;
 
 const widened = ([low, high]: [number, number]): [number, number] => {
   const more = (high - low) * AROUND;

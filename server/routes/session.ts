@@ -48,7 +48,9 @@ export function sessionRoutes({ config, db }: AppDependencies, { signIn, limits 
 /** Passport ends the old session and begins a new one, so that an id planted before is worth nothing. */
 const begin = (signIn: SignIn, req: Request, res: Response): Promise<void> =>
   new Promise((resolve, reject) => {
-    signIn.begin(req, res, (error?: Error | 'route' | 'router') => (error instanceof Error ? reject(error) : resolve()));
+    signIn.begin(req, res, (error?: Error | 'route' | 'router') =>
+      error instanceof Error ? reject(error) : resolve(),
+    );
   });
 
 const end = (req: Request): Promise<void> =>
