@@ -22,7 +22,10 @@ export interface Config {
   sessionSecret: string;
   trustProxy: number;
   workerThreads: number;
+  /** Demo accounts are wanted. */
   demo: boolean;
+  /** The demo's entries too. */
+  demoEntries: boolean;
   logLevel: string;
   /** Folder of what this checkout keeps: cluster settings, demo accounts, keys. */
   stateFolder: string;
@@ -63,7 +66,7 @@ export function readConfig(environment: Environment = process.env): Config {
   const port = read.whole('PORT', { from: 1, to: 65_535, otherwise: DEFAULT_PORT });
   const databaseUrl = read.url('DATABASE_URL', ['postgres:', 'postgresql:']);
   const stateFolder = resolve(read.text('STATE_FOLDER') ?? '.data');
-  const demoByDefault = !production && databaseUrl === null;
+  const demo = read.choice('DEMO', ['on', 'accounts', 'off'], !production && databaseUrl === null ? 'on' : 'off');
   const config: Omit<Config, 'sessionSecret'> = {
     production,
     host,
@@ -77,7 +80,8 @@ export function readConfig(environment: Environment = process.env): Config {
     metricsToken: read.text('METRICS_TOKEN'),
     trustProxy: read.whole('TRUST_PROXY', { from: 0, to: MAX_PROXIES, otherwise: 0 }),
     workerThreads: read.whole('WORKER_THREADS', { from: 1, to: MAX_THREADS, otherwise: DEFAULT_THREADS }),
-    demo: read.choice('DEMO', ['on', 'off'], demoByDefault ? 'on' : 'off') === 'on',
+    demo: demo !== 'off',
+    demoEntries: demo === 'on',
     logLevel: read.choice('LOG_LEVEL', LOG_LEVELS, 'info'),
     stateFolder,
     postgresBin: read.text('POSTGRES_BIN'),

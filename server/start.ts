@@ -36,7 +36,7 @@ async function start(running: Running): Promise<void> {
     DATABASE_URL: database.url,
     PORT: `${port}`,
     PUBLIC_URL: process.env['PUBLIC_URL'] ? config.publicUrl : address,
-    DEMO: config.demo ? 'on' : 'off',
+    DEMO: config.demoEntries ? 'on' : config.demo ? 'accounts' : 'off',
     STATE_FOLDER: config.stateFolder,
     NODE_ENV: config.production ? 'production' : 'development',
   });
@@ -75,7 +75,7 @@ async function startProcesses(running: Running, config: Config, environment: Rec
     restartOnChange([...running.children], say);
     add('client', expoProgram(environment['PORT']!), expoEnvironment(serverPort));
   }
-  if (config.demo)
+  if (config.demoEntries)
     say('Waiting until everything is there; the first start checks the demo orbits, which takes a while');
 }
 

@@ -35,7 +35,8 @@ export function NearestEntries({ submission, orbit, system, section }: Props) {
       })
     : null;
   if (!own || !near.data) return null;
-  const { items, distances, incipits } = near.data;
+  const { distances, incipits } = near.data;
+  const items = near.data.items.filter(({ accession }) => accession !== submission.accession);
   const same = report?.matches.find(({ relation }) => relation === 'same' || relation === 'same-other-start');
   const staves: ScoreStaff[] = [
     {

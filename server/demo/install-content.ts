@@ -19,7 +19,7 @@ export async function installContent(tools: InstallTools): Promise<void> {
   try {
     await lock.query('select pg_advisory_lock($1)', [DEMO_LOCK]);
     const people = await installDemoAccounts(config.stateFolder);
-    await loadDemo(tools, people);
+    if (config.demoEntries) await loadDemo(tools, people);
   } finally {
     await lock.end();
   }

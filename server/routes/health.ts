@@ -17,7 +17,7 @@ export function healthRoutes({ config, db }: AppDependencies, requests: RequestC
   });
 
   router.get('/readyz', async (_req, res) => {
-    const missing = await readiness(db, { demo: config.demo });
+    const missing = await readiness(db, config);
     if (missing.length > 0) throw new Problem('not-ready', `Not ready yet: ${missing.join(', ')}.`);
     res.set('Cache-Control', 'no-store').json({ status: 'ready' });
   });

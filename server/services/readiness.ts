@@ -4,18 +4,23 @@ import { demoOrbits } from '@/server/demo/demo-orbits';
 import { demoScenario } from '@/server/demo/demo-scenario';
 import { DEAD_AFTER_SECONDS } from '@/server/services/worker-life';
 
+interface DemoAsked {
+  demo: boolean;
+  demoEntries: boolean;
+}
+
 /**
  * What is missing before this server can do its whole job; nothing when it is ready.
  *
- * @param demo  Whether demo accounts and entries are asked for.
+ * @param asked Whether demo accounts, and the demo's entries, are asked for.
  */
-export async function readiness(db: Sequelize, { demo }: { demo: boolean }): Promise<string[]> {
+export async function readiness(db: Sequelize, asked: DemoAsked): Promise<string[]> {
   const waiting = await missingMigrations(db);
   // Nothing else can be asked of tables that are not there yet.
   if (waiting > 0) return [`${waiting} migrations have not run`];
   const missing = [];
   if (!(await hasLiveWorker(db))) missing.push('no worker is alive');
-  if (demo) missing.push(...(await missingDemo(db)));
+  if (asked.demo) missing.push(...(await missingDemo(db, asked)));
   return missing;
 }
 
@@ -37,7 +42,7 @@ async function hasLiveWorker(db: Sequelize): Promise<boolean> {
   return found?.alive ?? false;
 }
 
-async function missingDemo(db: Sequelize): Promise<string[]> {
+async function missingDemo(db: Sequelize, { demoEntries }: DemoAsked): Promise<string[]> {
   const emails = Object.values(demoScenario.people).map(({ email }) => email);
   const [found] = await db.query<{ accounts: number; entries: number }>(
     `select (select count(*)::integer from account where email = any($1::text[])) as accounts,
@@ -47,7 +52,7 @@ async function missingDemo(db: Sequelize): Promise<string[]> {
   const { accounts, entries } = found ?? { accounts: 0, entries: 0 };
   const missing = [];
   if (accounts < emails.length) missing.push(`${accounts} of ${emails.length} demo accounts are there`);
-  if (entries < demoOrbits.length)
+  if (demoEntries && entries < demoOrbits.length)
     missing.push(`${entries} of ${demoOrbits.length} demo orbits are checked and accepted`);
   return missing;
 }

@@ -45,7 +45,8 @@ describe('readConfig', () => {
   it('loads no demo content into a database that someone gave, unless asked', () => {
     const DATABASE_URL = 'postgres://ritornel@127.0.0.1/ritornel';
     expect(read({ DATABASE_URL }).demo).toBe(false);
-    expect(read({ DATABASE_URL, DEMO: 'on' }).demo).toBe(true);
+    expect(read({ DATABASE_URL, DEMO: 'on' })).toMatchObject({ demo: true, demoEntries: true });
+    expect(read({ DATABASE_URL, DEMO: 'accounts' })).toMatchObject({ demo: true, demoEntries: false });
   });
 
   it('takes the one role for both when no owner is given', () => {

@@ -19,7 +19,7 @@ import { testApp, type TestApp } from '../support/test-app';
 let t: TestApp;
 let jobs: JobRunner;
 beforeAll(async () => {
-  t = await testApp({ demo: true });
+  t = await testApp({ demo: true, demoEntries: true });
   jobs = await startJobs(t);
 });
 afterAll(async () => {
@@ -105,7 +105,7 @@ describe('the demo', () => {
   });
 
   it('has no place in production', async () => {
-    const fresh = await testApp({ demo: true, production: true });
+    const fresh = await testApp({ demo: true, demoEntries: true, production: true });
     const { config, db, tracer, checks, log } = fresh.dependencies;
     const desk = { db, publicUrl: config.publicUrl };
     await installContent({ config, desk, tracer, checks, log, signal: new AbortController().signal });

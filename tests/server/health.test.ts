@@ -38,7 +38,7 @@ describe('/readyz', () => {
 
   it('waits for demo content where it is asked for', async () => {
     await t.close();
-    t = await testApp({ demo: true });
+    t = await testApp({ demo: true, demoEntries: true });
     await aWorker('1 second');
     const { detail } = (await ready()).body;
     expect(detail).toContain('0 of 3 demo accounts');
