@@ -79,7 +79,7 @@ describe('readConfig', () => {
 
   it('lists everything that is wrong at once', () => {
     const problems = problemsOf({ PORT: '0', DEMO: 'maybe', TRUST_PROXY: 'yes' });
-    expect(problems.map((problem) => problem.split(' ')[0])).toEqual(['PORT', 'TRUST_PROXY', 'DEMO']);
+    expect(problems.map((problem) => problem.split(' ')[0])).toEqual(['PORT', 'DEMO', 'TRUST_PROXY']);
   });
 
   it('does not repeat an address in its error, which may hold a password', () => {

@@ -1,0 +1,110 @@
+import { AxeBuilder } from '@axe-core/playwright';
+import type { Browser, Page } from 'playwright-core';
+import { signIn, startBrowser, visitor } from '@/tests/support/browser';
+import { startWholeServer, type WholeServer } from '@/tests/support/whole-server';
+
+/** Most JavaScript that the first page may fetch, bytes as they come over the network. */
+const FIRST_PAGE_BYTES = 380_000;
+
+const sizes = [
+  { width: 390, height: 844 },
+  { width: 1440, height: 900 },
+] as const;
+
+let server: WholeServer;
+let browser: Browser;
+beforeAll(async () => {
+  server = await startWholeServer();
+  browser = await startBrowser();
+});
+afterAll(async () => {
+  await browser.close();
+  await server.stop();
+});
+
+/** Serious and critical findings of axe on the page as it stands. */
+async function seriousFindings(page: Page): Promise<string[]> {
+  const { violations } = await new AxeBuilder({ page }).analyze();
+  return violations
+    .filter(({ impact }) => impact === 'serious' || impact === 'critical')
+    .flatMap(({ id, nodes }) => nodes.map(({ html }) => `${id}: ${html.slice(0, 160)}`));
+}
+
+async function open(page: Page, path: string): Promise<void> {
+  await page.goto(server.url + path);
+  await page.getByRole('heading', { level: 1 }).first().waitFor({ state: 'attached' });
+  await page.waitForLoadState('networkidle');
+}
+
+describe('every page', () => {
+  it.each([
+    '/',
+    '/?q=lorenz%203%20returns',
+    '/orbits/RTN-0000001X',
+    '/orbits/RTN-00000019',
+    '/systems',
+    '/systems/lorenz',
+    '/bench?system=lorenz',
+    '/desk',
+    '/sign-in',
+    '/register',
+    '/forgot',
+    '/no-such-page',
+  ])('gives axe nothing serious: %s', async (path) => {
+    for (const size of sizes) {
+      for (const colorScheme of ['light', 'dark'] as const) {
+        const page = await visitor(browser, size);
+        await page.emulateMedia({ colorScheme });
+        await open(page, path);
+        expect(await seriousFindings(page)).toEqual([]);
+        expect(await page.evaluate(() => document.documentElement.scrollWidth <= window.innerWidth)).toBe(true);
+        await page.context().close();
+      }
+    }
+  });
+
+  it('gives axe nothing serious on the Desk of a curator and on a submission', async () => {
+    const page = await visitor(browser);
+    await signIn(page, server.url, server.accounts['curator']!);
+    await open(page, '/desk');
+    expect(await seriousFindings(page)).toEqual([]);
+    await page
+      .getByRole('link', { name: /^Submission/ })
+      .first()
+      .click();
+    await page.getByRole('heading', { name: 'Decision' }).waitFor();
+    await page.waitForLoadState('networkidle');
+    expect(await seriousFindings(page)).toEqual([]);
+  });
+
+  it('lets the administrator alone see the accounts', async () => {
+    const curator = await visitor(browser);
+    await signIn(curator, server.url, server.accounts['curator']!);
+    await open(curator, '/administration/users');
+    await curator.getByText(/This page is for administrators/).waitFor();
+    const administrator = await visitor(browser);
+    await signIn(administrator, server.url, server.accounts['administrator']!);
+    await open(administrator, '/administration/users');
+    expect(await administrator.getByRole('combobox', { name: /^Role of/ }).count()).toBe(3);
+    expect(await seriousFindings(administrator)).toEqual([]);
+  });
+
+  it('fetches little JavaScript for the first page, compressed and kept', async () => {
+    const page = await visitor(browser);
+    const scripts: { bytes: number; encoding: string; cache: string }[] = [];
+    page.on('response', (response) => {
+      if (response.request().resourceType() !== 'script') return;
+      const headers = response.headers();
+      scripts.push({
+        bytes: parseInt(headers['content-length'] ?? '0', 10),
+        encoding: headers['content-encoding'] ?? '',
+        cache: headers['cache-control'] ?? '',
+      });
+    });
+    await open(page, '/');
+    const bundles = scripts.filter(({ cache }) => cache.includes('immutable'));
+    expect(bundles.length).toBeGreaterThan(1);
+    expect(bundles.every(({ bytes, encoding }) => bytes > 0 && encoding !== '')).toBe(true);
+    expect(scripts.reduce((sum, { bytes }) => sum + bytes, 0)).toBeLessThan(FIRST_PAGE_BYTES);
+  });
+});
