@@ -2,7 +2,7 @@ const { request } = require('node:http');
 const { getDefaultConfig } = require('expo/metro-config');
 
 /** What belongs to the server when the client comes from the bundler: `npm run dev` says where it listens. */
-const SERVER_PATHS = /^\/(api|schemas|outbox|outbox\.json|readyz|healthz|metrics)([/?]|$)/;
+const SERVER_PATHS = /^\/(api|schemas|fonts|outbox|outbox\.json|readyz|healthz|metrics)([/?]|$)/;
 
 const config = getDefaultConfig(__dirname);
 

@@ -5,6 +5,10 @@ import { schemaDocuments } from '@/server/schema-registry';
 
 /** One year, in seconds: names below `_expo` and `assets` carry a hash of their content. */
 const IMMUTABLE = 'public, max-age=31536000, immutable';
+/** Fonts keep their names for good; a month lets a mended one through. */
+const MONTH = 'public, max-age=2592000';
+/** The subset fonts with their licences, served as they are. */
+const FONTS = join(__dirname, '..', '..', 'assets', 'fonts');
 /** Everything else is asked for again each time and answered 304. */
 const REVALIDATE = 'no-cache';
 
@@ -12,6 +16,16 @@ const REVALIDATE = 'no-cache';
 export function serveWeb(folder: string): Router {
   const router = Router();
   const page = join(folder, 'index.html');
+  router.use(
+    '/fonts',
+    express.static(FONTS, {
+      index: false,
+      redirect: false,
+      setHeaders: (res) => {
+        res.setHeader('Cache-Control', MONTH);
+      },
+    }),
+  );
   router.use(
     express.static(folder, {
       index: false,
@@ -31,7 +45,7 @@ export function serveWeb(folder: string): Router {
 
 /** Addresses of files and of the API never answer with the page: a missing script must not be read as HTML. */
 const isFile = (path: string): boolean =>
-  /^\/(?:api|_expo|assets|schemas)(?:\/|$)/.test(path) || /\.[a-z0-9]{1,5}$/i.test(path);
+  /^\/(?:api|_expo|assets|fonts|schemas)(?:\/|$)/.test(path) || /\.[a-z0-9]{1,5}$/i.test(path);
 
 /** The contract's schemas, as files. */
 export function serveSchemas(): Router {
