@@ -1,5 +1,6 @@
 import { readFileSync, statSync } from 'node:fs';
 import { join } from 'node:path';
+import request from 'supertest';
 import { demoOrbits } from '@/server/demo/demo-orbits';
 import { demoScenario } from '@/server/demo/demo-scenario';
 import type { InstallTools } from '@/server/demo/demo-tools';
@@ -13,6 +14,8 @@ import { SystemVersion } from '@/server/models/system-version';
 import { User } from '@/server/models/user';
 import { checkPassword } from '@/server/services/check-password';
 import { builtInSystems } from '@/server/systems/built-in-systems';
+import { caseRequest } from '@/tests/reference/case-request';
+import { loadCases } from '@/tests/reference/load-cases';
 import { type JobRunner, startJobs } from '../support/job-runner';
 import { testApp, type TestApp } from '../support/test-app';
 
@@ -86,6 +89,19 @@ describe('the demo', () => {
   it('leaves work on the desk', async () => {
     const states = (await Submission.findAll()).map(({ reviewState }) => reviewState);
     expect(states).toEqual(expect.arrayContaining(['draft', 'submitted', 'returned']));
+  });
+
+  it('is what the duplicates among the published cases are recognised against', async () => {
+    const duplicates = loadCases().filter(({ expect: { reason } }) => reason === 'duplicate');
+    expect(duplicates.length).toBeGreaterThan(0);
+    for (const one of duplicates) {
+      const res = await request(t.app).post('/api/v1/checks').set('Prefer', 'wait=60').send(caseRequest(one).body);
+      expect(res.body.findings.map(({ code }: { code: string }) => code)).toEqual(['already-known']);
+      const [match] = res.body.matches;
+      const entry = await request(t.app).get(`/api/v1/orbits/${match.accession}`);
+      // The case names the orbit that it repeats: lorenz-AAB, lorenz-AAAAB.
+      expect(`lorenz-${entry.body.itinerary}`).toBe(one.duplicate_of);
+    }
   });
 
   it('changes nothing when it is there', async () => {
