@@ -4,6 +4,7 @@ import { View } from 'react-native';
 import { newIdempotencyKey } from '@/features/api/client';
 import { useUser } from '@/features/api/session';
 import { useCreateSubmission } from '@/features/api/submissions';
+import { closedOrbit } from '@/features/checking/closed-orbit';
 import { RefusedFields } from '@/features/checking/refused-fields';
 import { Button, space, Text } from '@/features/ui';
 import type { CheckReport, DraftBody } from '@/schemas/generated/contract';
@@ -19,7 +20,7 @@ export function NextStep({ report, body }: Props) {
   const router = useRouter();
   const create = useCreateSubmission();
   const keys = useRef({ draft: newIdempotencyKey(), send: newIdempotencyKey() });
-  const closes = report.verdict === 'closes' || report.verdict === 'closes-after-correction';
+  const closes = closedOrbit(report) !== null;
   if (!user) {
     return (
       <View style={{ flexDirection: 'row' }}>

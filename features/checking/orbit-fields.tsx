@@ -57,7 +57,7 @@ export function OrbitFields({ systems, draft, onChange, messageAt }: OrbitFields
           />
         </View>
         <View style={{ flexGrow: 1, flexBasis: 0 }}>
-          <Field label="Returns" optional {...field('returns')} />
+          <Field label="Returns" {...field('returns')} placeholder="optional" />
         </View>
       </View>
       <Field label="Return times" optional {...field('returnTimes')} placeholder="separated by spaces" />

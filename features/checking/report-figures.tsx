@@ -1,4 +1,5 @@
 import { View } from 'react-native';
+import { closedOrbit } from '@/features/checking/closed-orbit';
 import { FigureRow } from '@/features/notation/figure-row';
 import { formatMultiplierSize } from '@/features/notation/format-multiplier';
 import type { CheckReport } from '@/schemas/generated/contract';
@@ -10,7 +11,8 @@ const COSINE_DIGITS = 4;
 
 /** The figures of a report, always in this order, with their limits. */
 export function ReportFigures({ report, muted = false }: { report: CheckReport; muted?: boolean }) {
-  const { closure, correction, orbit, digits } = report;
+  const { closure, correction, digits } = report;
+  const orbit = closedOrbit(report);
   const limit = closure?.tolerance ?? 0;
   const against = (value: number) => ({ value, relation: value <= limit ? ('≤' as const) : ('>' as const), limit });
   const [largest] = orbit?.multipliers ?? [];

@@ -1,3 +1,4 @@
+import { closedOrbit } from '@/features/checking/closed-orbit';
 import { sectionStaff } from '@/features/notation/entry-music';
 import type { IncipitMusic } from '@/features/notation/incipit-props';
 import { orbitMusic } from '@/features/notation/orbit-music';
@@ -25,7 +26,8 @@ export function reportMusic({ report, system, section, state, trace }: Options):
   const variables = system?.document.variables.map(({ name }) => name) ?? [];
   const index = Math.max(0, variables.indexOf(incipit.coordinate));
   const flow = flowOf(trace, index);
-  if (report.orbit) return orbitMusic(report.orbit, { variables, incipit, state, flow });
+  const orbit = closedOrbit(report);
+  if (orbit) return orbitMusic(orbit, { variables, incipit, state, flow });
   const first = trace?.points[0]?.[index];
   if (!trace || first === undefined) return null;
   const last = trace.times.at(-1) ?? 0;

@@ -1,5 +1,6 @@
 import { View } from 'react-native';
 import { useRecheckSubmission } from '@/features/api/submissions';
+import { closedOrbit } from '@/features/checking/closed-orbit';
 import { draftOfBody } from '@/features/checking/orbit-draft';
 import { RefusedFields } from '@/features/checking/refused-fields';
 import { ReportView } from '@/features/checking/report-view';
@@ -29,6 +30,7 @@ export function Review({ submission, etag, systems, isCurator }: Props) {
   const wide = useLayout() === 'wide';
   const { number, revision, report, check, owner, accession, decision, isMine } = submission;
   const draft = draftOfBody(submission.body);
+  const orbit = report && closedOrbit(report);
   const system = systems.find(({ slug }) => slug === draft.system);
   const state = orbitState(submission.reviewState, submission.checkState, submission.verdict);
   const isOpen = submission.reviewState === 'submitted' || submission.reviewState === 'in-review';
@@ -64,8 +66,8 @@ export function Review({ submission, etag, systems, isCurator }: Props) {
               period={draft.period}
               muted={!submission.reportIsCurrent}
             >
-              {report.orbit ? (
-                <NearestEntries submission={submission} orbit={report.orbit} system={system} section={draft.section} />
+              {orbit ? (
+                <NearestEntries submission={submission} orbit={orbit} system={system} section={draft.section} />
               ) : null}
             </ReportView>
           ) : (

@@ -32,7 +32,12 @@ export function SubmissionItem({ submission }: { submission: SubmissionSummary }
         <Text size={14}>
           <Text italic>{system.data?.name ?? draft.system}</Text>
           {draft.returns ? ` · ${draft.returns} ${draft.returns === '1' ? 'return' : 'returns'}` : ''}
-          {draft.period ? ` · T ${draft.period}` : ''}
+          {draft.period ? (
+            <>
+              {' · '}
+              <Text italic>T</Text> <Text mono>{draft.period}</Text>
+            </>
+          ) : null}
         </Text>
         <Text size={14} tone="muted">
           {checkWords(submission)}
