@@ -3,7 +3,7 @@ import type { AddressInfo } from 'node:net';
 import request from 'supertest';
 import type { CheckRequest } from '@/schemas/generated/contract';
 import { OrbitCheck } from '@/server/models/orbit-check';
-import { CHECKS_AT_ONCE, CHECKS_AT_ONCE_WITHOUT_ACCOUNT } from '@/server/services/check-limits';
+import { CHECKS_AT_ONCE } from '@/server/services/check-limits';
 import { formErrors } from '@/server/http/form-errors';
 import { type JobRunner, startJobs } from '../support/job-runner';
 import { lorenzOrbit, pendulumDocument, slowOrbit } from '../support/orbits';
@@ -204,8 +204,9 @@ describe('who may compute', () => {
     expect(res.body.findings).toMatchObject([{ code: 'too-long', severity: 'blocker' }]);
     expect(res.body.engine.cpuMs).toBeGreaterThan(4_500);
     expect(res.body.engine.cpuMs).toBeLessThan(10_000);
-    await Promise.all(Array.from({ length: CHECKS_AT_ONCE_WITHOUT_ACCOUNT - 1 }, post));
-    const refused = await post();
+    // A check computes 4.5 s at least, so three use up the 10 s; two do when nothing else keeps the machine busy.
+    let refused = await post();
+    for (let more = 0; more < 2 && refused.status !== 429; more += 1) refused = await post();
     expect([refused.status, refused.body.code]).toEqual([429, 'computing-time-used']);
     expect(Number(refused.headers['retry-after'])).toBeLessThanOrEqual(60);
   });
