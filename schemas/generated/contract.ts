@@ -1216,7 +1216,7 @@ export interface System {
    */
   text: string;
   /**
-   * the divergence as a formula
+   * the divergence as a formula; null where it is no short polynomial
    */
   divergence: string | null;
   sections: {

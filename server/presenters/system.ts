@@ -18,7 +18,7 @@ export function presentSystem(system: ListedSystem): System {
     document,
     mathml: typeset.mathml,
     text: typeset.text,
-    divergence: null,
+    divergence: typeset.divergence,
     sections: (document.sections ?? []).map(({ name, formula, description, letters }) => ({
       name,
       formula: typeset.sections.get(name)?.formula ?? formula,

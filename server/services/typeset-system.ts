@@ -1,6 +1,7 @@
 import type { SystemDocument } from '@/schemas/generated/contract';
 import { checkSystem } from '@/server/formulas/check-system';
 import type { CheckedSystem } from '@/server/formulas/checked-system';
+import { divergenceText } from '@/server/formulas/divergence-text';
 import { formatFormula } from '@/server/formulas/format-formula';
 import { equationsToMathML, toMathML } from '@/server/formulas/to-mathml';
 
@@ -8,6 +9,8 @@ import { equationsToMathML, toMathML } from '@/server/formulas/to-mathml';
 export interface TypesetSystem {
   mathml: string;
   text: string;
+  /** The divergence of the field; null where it is no short polynomial. */
+  divergence: string | null;
   /** Formula and MathML of each section, by its name. */
   sections: ReadonlyMap<string, { formula: string; mathml: string }>;
 }
@@ -49,6 +52,7 @@ function typesetChecked(system: CheckedSystem): TypesetSystem {
       ...equations.map(({ variable, expression }) => `${variable}' = ${formatFormula(expression)}`),
       ...system.definitions.map(({ name, expression }) => `${name} = ${formatFormula(expression)}`),
     ].join('\n'),
+    divergence: divergenceText(system),
     sections: new Map(
       system.sections.map(({ name, expression }) => [
         name,
