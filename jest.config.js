@@ -51,6 +51,8 @@ module.exports = {
     nodeProject('server', ['server'], {
       globalSetup: '<rootDir>/tests/support/global-setup.js',
       globalTeardown: '<rootDir>/tests/support/global-teardown.js',
+      // The library that reads citations back fetches through packages of ES modules.
+      transformIgnorePatterns: ['/node_modules/(?!(?:.*/)?(?:node-fetch|data-uri-to-buffer|fetch-blob|formdata-polyfill)/)'],
     }),
     {
       displayName: 'features',

@@ -37,7 +37,17 @@ export function apiAddress(path: string, query: Query = {}): string {
 }
 
 /** Send a request and read its JSON, with the ETag it came under. */
-export async function requestJson<T>(path: string, options: RequestOptions = {}): Promise<Tagged<T>> {
+export const requestJson = <T>(path: string, options: RequestOptions = {}): Promise<Tagged<T>> =>
+  send(path, options, async (response) => {
+    const data: unknown = response.status === 204 ? undefined : ((await response.json()) as unknown);
+    return { data: data as T, etag: response.headers.get('ETag') };
+  });
+
+/** Read an answer that is plain text. */
+export const getText = (path: string, options: RequestOptions = {}): Promise<string> =>
+  send(path, { ...options, headers: { Accept: 'text/plain, */*' } }, (response) => response.text());
+
+async function send<T>(path: string, options: RequestOptions, read: (response: Response) => Promise<T>): Promise<T> {
   const { method = 'GET', query, body, headers = {}, signal, timeoutMs = ANSWER_TIMEOUT_MS } = options;
   const limit = new AbortController();
   const timer = setTimeout(() => limit.abort(), timeoutMs);
@@ -56,8 +66,7 @@ export async function requestJson<T>(path: string, options: RequestOptions = {})
       ...(body === undefined ? {} : { body: JSON.stringify(body) }),
     });
     if (!response.ok) throw await refusalOf(response);
-    const data: unknown = response.status === 204 ? undefined : ((await response.json()) as unknown);
-    return { data: data as T, etag: response.headers.get('ETag') };
+    return await read(response);
   } catch (error) {
     throw asApiError(error, { stopped: signal?.aborted === true, late: limit.signal.aborted, timeoutMs });
   } finally {

@@ -6,7 +6,7 @@ import {
   useQuery,
 } from '@tanstack/react-query';
 import type { Entry, EntryRevision, OrbitPage, System, Trace } from '@/schemas/generated/contract';
-import { apiAddress, getJson, type Query } from '@/features/api/client';
+import { apiAddress, getJson, getText, type Query } from '@/features/api/client';
 
 /** What a catalogue search can ask for, under the names of the API. Every field is part of the cache key. */
 export interface OrbitFilter {
@@ -49,12 +49,15 @@ function filterQuery(filter: OrbitFilter): Query {
 export const exportAddress = (filter: OrbitFilter, format: ExportFormat): string =>
   apiAddress(`/orbits.${format}`, filterQuery(filter));
 
+const pathOf = (accession: string): string => `/orbits/${encodeURIComponent(accession)}`;
+
+/** The ends of the addresses under which one entry is a file. */
+export type EntryFile = 'json' | 'csv' | 'bib' | 'csl.json' | 'ris';
+
 /** The address of one entry as a file. */
-export const entryAddress = (accession: string, format: 'json' | 'csv'): string =>
-  apiAddress(`/orbits/${encodeURIComponent(accession)}.${format}`);
+export const entryAddress = (accession: string, file: EntryFile): string => apiAddress(`${pathOf(accession)}.${file}`);
 
 const root = ['orbit'] as const;
-const pathOf = (accession: string) => `/orbits/${encodeURIComponent(accession)}`;
 
 export const orbitQueries = {
   root,
@@ -80,6 +83,19 @@ export const orbitQueries = {
       queryKey: [...root, 'revisions', accession] as const,
       queryFn: ({ signal }) => getJson<{ items: EntryRevision[] }>(`${pathOf(accession)}/revisions`, { signal }),
       staleTime: Infinity,
+    }),
+
+  /** The sentence to cite, and the same as BibTeX. */
+  citation: (accession: string) =>
+    queryOptions({
+      queryKey: [...root, 'citation', accession] as const,
+      queryFn: async ({ signal }) => {
+        const [sentence, bibtex] = await Promise.all(
+          ['txt', 'bib'].map((suffix) => getText(`${pathOf(accession)}.${suffix}`, { signal })),
+        );
+        return { sentence: sentence!.trim(), bibtex: bibtex!.trim() };
+      },
+      staleTime: SEARCH_FRESH_MS,
     }),
 
   search: (filter: OrbitFilter) =>
@@ -119,6 +135,10 @@ export const useOrbit = (accession: string, enabled = true) => useQuery({ ...orb
 
 /** The polyline of one entry. */
 export const useOrbitTrace = (accession: string) => useQuery(orbitQueries.trace(accession));
+
+/** How to cite an entry; fetched when somebody wants to. */
+export const useCitation = (accession: string, enabled: boolean) =>
+  useQuery({ ...orbitQueries.citation(accession), enabled });
 
 export const useOrbitRevisions = (accession: string) => useQuery(orbitQueries.revisions(accession));
 

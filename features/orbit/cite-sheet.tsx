@@ -1,7 +1,6 @@
 import { View } from 'react-native';
-import { longDate } from '@/features/notation/long-date';
-import { cutDecimals } from '@/features/notation/cut-decimals';
-import { Button, CopyButton, Labelled, Sheet, Text } from '@/features/ui';
+import { useCitation } from '@/features/api/orbits';
+import { Button, CopyButton, Failure, Labelled, Sheet, StaffLines, Text } from '@/features/ui';
 import type { Entry } from '@/schemas/generated/contract';
 
 interface CiteSheetProps {
@@ -10,38 +9,45 @@ interface CiteSheetProps {
   onClose: () => void;
 }
 
-/** The sentence to cite, and the permanent address. */
+/** The sentence to cite, the same as BibTeX, and the permanent address. */
 export function CiteSheet({ entry, open, onClose }: CiteSheetProps) {
-  const address = permanentAddress(entry);
-  const sentence = citation(entry);
+  const address = `${window.location.origin}/orbits/${entry.accession}`;
   return (
     <Sheet open={open} onClose={onClose} title="Cite" footer={<Button onPress={onClose}>Close</Button>}>
       <View>
-        <Labelled ruled={false} label="Sentence" action={<CopyButton text={sentence} what="sentence" said="Copied" />}>
-          <Text>{sentence}</Text>
-        </Labelled>
+        <Citation entry={entry} enabled={open} />
         <Labelled label="Permanent address" action={<CopyButton text={address} what="address" said="Copied" />}>
-          <Text style={{ overflowWrap: 'anywhere' } as object}>{address}</Text>
+          <Text style={anywhere}>{address}</Text>
         </Labelled>
         <Text size={14} tone="muted">
-          Entries are released under {entry.licence}. An entry keeps its page and its address for ever, also when it is
-          withdrawn.
+          CSL-JSON and RIS are under Export. Entries are released under {entry.licence}. An entry keeps its page and its
+          address for ever, also when it is withdrawn.
         </Text>
       </View>
     </Sheet>
   );
 }
 
-const permanentAddress = ({ accession }: Entry): string => `${window.location.origin}/orbits/${accession}`;
+const anywhere = { overflowWrap: 'anywhere' } as object;
 
-/** One sentence that names the contributor, the orbit, the archive, the revision and the address. */
-function citation(entry: Entry): string {
-  const period = cutDecimals(entry.period, entry.evidence.digits);
-  const returns = `${entry.returns} ${entry.returns === 1 ? 'return' : 'returns'}`;
+function Citation({ entry, enabled }: { entry: Entry; enabled: boolean }) {
+  const citation = useCitation(entry.accession, enabled);
+  if (citation.isError) {
+    const kept = 'The permanent address below is enough to find the entry.';
+    return <Failure title="The citation did not come" error={citation.error} kept={kept} onRetry={citation.refetch} />;
+  }
+  if (!citation.data) return <StaffLines kind="loading" />;
+  const { sentence, bibtex } = citation.data;
   return (
-    `${entry.contributor.name}: Periodic orbit ${entry.accession} of the system ${entry.system.name} ` +
-    `(T = ${period.text}${period.more ? '…' : ''}, ${returns}). Ritornel, revision ${entry.revision}, ` +
-    `accepted ${longDate(entry.acceptedAt)}${entry.withdrawal ? `, withdrawn ${longDate(entry.withdrawal.at)}` : ''}. ` +
-    permanentAddress(entry)
+    <>
+      <Labelled ruled={false} label="Sentence" action={<CopyButton text={sentence} what="sentence" said="Copied" />}>
+        <Text>{sentence}</Text>
+      </Labelled>
+      <Labelled label="BibTeX" action={<CopyButton text={bibtex} what="BibTeX" said="Copied" />}>
+        <Text mono size={13} style={{ ...anywhere, whiteSpace: 'pre-wrap' } as object}>
+          {bibtex}
+        </Text>
+      </Labelled>
+    </>
   );
 }

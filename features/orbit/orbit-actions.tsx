@@ -7,6 +7,9 @@ import type { Entry } from '@/schemas/generated/contract';
 const FORMATS = [
   { format: 'json', label: 'JSON' },
   { format: 'csv', label: 'CSV' },
+  { format: 'bib', label: 'BibTeX' },
+  { format: 'csl.json', label: 'CSL-JSON' },
+  { format: 'ris', label: 'RIS' },
 ] as const;
 
 /** Cite, export, copy: at the right of the head, on a phone in the strip. */

@@ -1,3 +1,4 @@
+import { entryForms } from '@/server/presenters/entry-forms';
 import { ifNoneMatch, type Operation, pageParameters, pathParameter } from '@/server/openapi/operation';
 import { exportParameters, searchParameters } from '@/server/openapi/search-parameters';
 
@@ -67,9 +68,18 @@ export const orbitOperations: readonly Operation[] = [
     method: 'get',
     path: '/orbits/:accession',
     summary: 'One entry',
-    description: 'JSON, CSV by Accept or the suffix .csv; a browser that asks for HTML is sent on to the page.',
+    description:
+      'JSON; by Accept or a suffix CSV (.csv), BibTeX (.bib), CSL-JSON (.csl.json), RIS (.ris) and a sentence to cite ' +
+      '(.txt). A browser that asks for HTML is sent on to the page with 303.',
     parameters: [ACCESSION, ifNoneMatch],
-    answers: [{ status: 200, description: 'The entry, withdrawn or not.', schema: 'entry', media: ['text/csv'] }],
+    answers: [
+      {
+        status: 200,
+        description: 'The entry, withdrawn or not.',
+        schema: 'entry',
+        media: entryForms.map(({ media }) => media),
+      },
+    ],
     problems: [...UNKNOWN, 'not-acceptable'],
   },
   {

@@ -4,23 +4,24 @@ import { Problem } from '@/server/errors';
 import { answerWithEtag, strongEtag } from '@/server/http/conditional';
 import { readPoints } from '@/server/http/read-points';
 import { presentEntry } from '@/server/presenters/entry';
-import { entryTable } from '@/server/presenters/entry-csv';
+import { entryForms } from '@/server/presenters/entry-forms';
 import { type EntryRow } from '@/server/services/entry-rows';
 import { findEntry } from '@/server/services/find-entry';
 import { findTraceRequest } from '@/server/services/find-trace-request';
 import { listRevisions } from '@/server/services/list-revisions';
 
-const FORMS = ['application/json', 'text/csv', 'text/html'] as const;
-type Form = (typeof FORMS)[number];
+const JSON_FORM = 'application/json';
+const PAGE_FORM = 'text/html';
+const FORMS = [JSON_FORM, ...entryForms.map(({ media }) => media), PAGE_FORM];
 
 /** One entry, its picture and its history. */
-export function entryRoutes({ pool, tracer }: AppDependencies): Router {
+export function entryRoutes({ pool, tracer, config }: AppDependencies): Router {
   const router = Router();
 
   router.get('/orbits/:accession', async (req, res) => {
     const [typed, suffix] = splitSuffix(req.params['accession']);
     const entry = await findEntry(pool, typed);
-    sendEntry(req, res, { entry, form: suffix ?? acceptedForm(req) });
+    sendEntry(req, res, { entry, form: suffix ?? acceptedForm(req), publicUrl: config.publicUrl });
   });
 
   router.get('/orbits/:accession/trace', async (req, res) => {
@@ -40,32 +41,36 @@ export function entryRoutes({ pool, tracer }: AppDependencies): Router {
 }
 
 /** `RTN-00000175.csv` asks for CSV, whatever the headers say. */
-function splitSuffix(address: string): [typed: string, form: Form | null] {
-  const [, typed, suffix] = /^(.*)\.(csv|json)$/i.exec(address) ?? [];
-  if (typed === undefined) return [address, null];
-  return [typed, suffix?.toLowerCase() === 'csv' ? 'text/csv' : 'application/json'];
+function splitSuffix(address: string): [typed: string, form: string | null] {
+  const lower = address.toLowerCase();
+  const form = entryForms.find(({ suffix }) => lower.endsWith(`.${suffix}`));
+  if (form) return [address.slice(0, -form.suffix.length - 1), form.media];
+  return lower.endsWith('.json') ? [address.slice(0, -'.json'.length), JSON_FORM] : [address, null];
 }
 
-function acceptedForm(req: Request): Form {
-  const form = req.accepts([...FORMS]) as Form | false;
+function acceptedForm(req: Request): string {
+  const form = req.accepts(FORMS);
   if (form) return form;
   throw new Problem('not-acceptable', `An entry is available as ${FORMS.join(', ')}.`);
 }
 
-function sendEntry(req: Request, res: Response, { entry, form }: { entry: EntryRow; form: Form }): void {
-  const shown = presentEntry(entry);
+interface Sent {
+  entry: EntryRow;
+  form: string;
+  publicUrl: string;
+}
+
+function sendEntry(req: Request, res: Response, { entry, form, publicUrl }: Sent): void {
   res.vary('Accept');
-  if (form === 'text/html') {
-    res.redirect(302, shown.links.page);
+  const file = entryForms.find(({ media }) => media === form);
+  if (file) {
+    res
+      .set('Content-Disposition', `attachment; filename="${entry.accession}.${file.suffix}"`)
+      .type(file.type)
+      .send(file.render(entry, publicUrl));
     return;
   }
-  if (form === 'application/json') {
-    answerWithEtag(req, res, { etag: strongEtag(JSON.stringify(shown)), body: shown });
-    return;
-  }
-  const table = entryTable({ dimension: shown.point.length, parameters: Object.keys(shown.parameters) });
-  res
-    .set('Content-Disposition', `attachment; filename="${shown.accession}.csv"`)
-    .type('text/csv; charset=utf-8; header=present')
-    .send(table.header + table.record(shown));
+  const shown = presentEntry(entry);
+  if (form === PAGE_FORM) res.redirect(303, shown.links.page);
+  else answerWithEtag(req, res, { etag: strongEtag(JSON.stringify(shown)), body: shown });
 }

@@ -20,6 +20,8 @@ export interface EntryRow {
   digits: number;
   incipit: number[][];
   content: EntryContent;
+  /** When the current revision was made. */
+  revised_at: Date;
   references: Reference[];
   contributor_name: string;
   contributor_orcid: string | null;
@@ -36,7 +38,7 @@ export interface EntryRow {
 export const entryColumns = `
   o.number, o.accession, o.revision, o.status, s.slug, o.system_version, v.document ->> 'name' as system_name,
   c.name as section_name, c.formula as section_formula, o.parameters, o.returns, o.stability, o.itinerary, o.evidence,
-  o.digits, o.incipit, r.content,
+  o.digits, o.incipit, r.content, r.at as revised_at,
   (select coalesce(json_agg(json_strip_nulls(json_build_object('citation', f.citation, 'doi', f.doi)) order by f.position), '[]')
    from reference f where f.orbit_number = o.number and f.revision = o.revision) as "references",
   a.name as contributor_name, a.orcid as contributor_orcid, k.name as curator_name, k.orcid as curator_orcid,

@@ -58,7 +58,7 @@ describe('GET /orbits/:accession', () => {
 
   it('sends a browser on to the page', async () => {
     const res = await get('RTN-0000001X', { Accept: 'text/html,application/xhtml+xml,*/*;q=0.8' });
-    expect([res.status, res.headers['location']]).toEqual([302, '/orbits/RTN-0000001X']);
+    expect([res.status, res.headers['location']]).toEqual([303, '/orbits/RTN-0000001X']);
     expect(res.headers['vary']).toContain('Accept');
   });
 

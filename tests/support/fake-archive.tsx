@@ -71,6 +71,7 @@ function respond(answer: FakeAnswer, signal: AbortSignal | null): Promise<Respon
     status,
     headers: { get: (name: string) => all.get(name) ?? null },
     json: () => Promise.resolve(body),
+    text: () => Promise.resolve(String(body)),
   } as unknown as Response);
 }
 

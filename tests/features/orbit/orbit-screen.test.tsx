@@ -86,23 +86,46 @@ describe('the page of an entry', () => {
     expect(screen.queryByRole('link', { name: /^previous/ })).toBeNull();
   });
 
-  it('cites with the revision, the date and the permanent address', async () => {
-    fakeArchive(answers());
+  it('cites with the sentence and the BibTeX of the server, and the permanent address', async () => {
+    const calls = fakeArchive({
+      ...answers(),
+      'GET /orbits/RTN-0000001X.txt': { body: 'Jana Nováková: Periodic orbit RTN-0000001X, revision 1.\n' },
+      'GET /orbits/RTN-0000001X.bib': { body: '@misc{RTN-0000001X,\n}\n' },
+    });
     show();
-    fireEvent.click(await screen.findByRole('button', { name: 'Cite' }));
+    const cite = await screen.findByRole('button', { name: 'Cite' });
+    expect(calls.some(({ path }) => path.endsWith('.bib'))).toBe(false);
+    fireEvent.click(cite);
     const sheet = screen.getByRole('dialog', { name: 'Cite' });
-    expect(
-      within(sheet).getByText(/RTN-0000001X of the system Lorenz .*revision 1, accepted 16 March 2026/),
-    ).toBeTruthy();
+    expect(await within(sheet).findByText('Jana Nováková: Periodic orbit RTN-0000001X, revision 1.')).toBeTruthy();
+    expect(within(sheet).getByText(/^@misc\{RTN-0000001X,/)).toBeTruthy();
     expect(within(sheet).getByText(/^http:\/\/localhost\/orbits\/RTN-0000001X$/)).toBeTruthy();
   });
 
-  it('offers JSON and CSV', async () => {
+  it('says when the citation does not come, and asks again', async () => {
+    let answer: FakeAnswer = 'offline';
+    fakeArchive({
+      ...answers(),
+      'GET /orbits/RTN-0000001X.txt': () => answer,
+      'GET /orbits/RTN-0000001X.bib': () => answer,
+    });
+    show();
+    fireEvent.click(await screen.findByRole('button', { name: 'Cite' }));
+    const sheet = screen.getByRole('dialog', { name: 'Cite' });
+    expect(await within(sheet).findByText(/permanent address below/)).toBeTruthy();
+    answer = { body: 'A sentence.' };
+    fireEvent.click(within(sheet).getByRole('button', { name: 'Try again' }));
+    expect(await within(sheet).findAllByText('A sentence.')).toHaveLength(2);
+  });
+
+  it('offers JSON, CSV, BibTeX, CSL-JSON and RIS', async () => {
     fakeArchive(answers());
     show();
     fireEvent.click(await screen.findByRole('button', { name: 'Export' }));
     const csv = screen.getByRole('menuitem', { name: 'CSV' });
     expect(csv.getAttribute('href')).toBe('/api/v1/orbits/RTN-0000001X.csv');
+    const csl = screen.getByRole('menuitem', { name: 'CSL-JSON' });
+    expect(csl.getAttribute('download')).toBe('RTN-0000001X.csl.json');
   });
 
   it('keeps the numbers of a withdrawn entry and names what replaces it', async () => {

@@ -1,0 +1,18 @@
+import type { Citation } from '@/server/presenters/citation/citation';
+
+/** A citation as CSL-JSON: a list of one item. */
+export function toCslJson({ accession, author, title, version, date, publisher, address, note }: Citation): string {
+  const item = {
+    id: accession,
+    type: 'dataset',
+    title,
+    author: [{ literal: author }],
+    issued: { 'date-parts': [[date.year, date.month, date.day]] },
+    publisher,
+    version,
+    number: accession,
+    URL: address,
+    note,
+  };
+  return `${JSON.stringify([item], null, 2)}\n`;
+}
