@@ -9,8 +9,10 @@ import { nothingHere, problemResponses } from '@/server/http/problem-response';
 import { RequestCounts } from '@/server/http/request-counts';
 import { requestIdOf, withRequestId } from '@/server/http/request-id';
 import { serveSchemas, serveWeb } from '@/server/http/serve-web';
+import { crawlerRoutes } from '@/server/routes/crawlers';
 import { healthRoutes } from '@/server/routes/health';
 import { outboxRoutes } from '@/server/routes/outbox';
+import { pageRoutes } from '@/server/routes/pages';
 
 /** Where `npm run build` puts the web client. */
 const WEB_FOLDER = join(__dirname, '..', 'dist');
@@ -29,7 +31,7 @@ export function buildApp(dependencies: AppDependencies): Express {
   app.use('/api/v1', apiRoutes(dependencies));
   app.use(serveSchemas());
   if (!dependencies.config.production) app.use(outboxRoutes(dependencies));
-  app.use(serveWeb(WEB_FOLDER));
+  app.use(crawlerRoutes(dependencies), pageRoutes(dependencies, WEB_FOLDER), serveWeb(WEB_FOLDER));
   app.use(nothingHere);
   app.use(problemResponses(dependencies.log));
   return app;

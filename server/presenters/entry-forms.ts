@@ -13,34 +13,45 @@ interface EntryForm {
   /** The end of an address or a file's name. */
   suffix: string;
   type: string;
+  isCitation: boolean;
   render: (row: EntryRow, publicUrl: string) => string;
 }
 
 /** One entry as a file, beside JSON, the form that comes first. */
 export const entryForms: readonly EntryForm[] = [
-  { media: 'text/csv', suffix: 'csv', type: 'text/csv; charset=utf-8; header=present', render: toCsv },
+  {
+    media: 'text/csv',
+    suffix: 'csv',
+    type: 'text/csv; charset=utf-8; header=present',
+    isCitation: false,
+    render: toCsv,
+  },
   {
     media: 'application/x-bibtex',
     suffix: 'bib',
     type: 'application/x-bibtex; charset=utf-8',
+    isCitation: true,
     render: (row, publicUrl) => toBibtex(citationOf(row, publicUrl)),
   },
   {
     media: 'application/vnd.citationstyles.csl+json',
     suffix: 'csl.json',
     type: 'application/vnd.citationstyles.csl+json; charset=utf-8',
+    isCitation: true,
     render: (row, publicUrl) => toCslJson(citationOf(row, publicUrl)),
   },
   {
     media: 'application/x-research-info-systems',
     suffix: 'ris',
     type: 'application/x-research-info-systems; charset=utf-8',
+    isCitation: true,
     render: (row, publicUrl) => toRis(citationOf(row, publicUrl)),
   },
   {
     media: 'text/plain',
     suffix: 'txt',
     type: 'text/plain; charset=utf-8',
+    isCitation: true,
     render: (row, publicUrl) => toSentence(citationOf(row, publicUrl)),
   },
 ];

@@ -4,6 +4,8 @@ import { Problem } from '@/server/errors';
 import { answerWithEtag, strongEtag } from '@/server/http/conditional';
 import { readPoints } from '@/server/http/read-points';
 import { presentEntry } from '@/server/presenters/entry';
+import { entryFileLinks } from '@/server/presenters/head/entry-head';
+import { linkHeader } from '@/server/presenters/head/page-head';
 import { entryForms } from '@/server/presenters/entry-forms';
 import { type EntryRow } from '@/server/services/entry-rows';
 import { findEntry } from '@/server/services/find-entry';
@@ -61,7 +63,7 @@ interface Sent {
 }
 
 function sendEntry(req: Request, res: Response, { entry, form, publicUrl }: Sent): void {
-  res.vary('Accept');
+  res.vary('Accept').set('Link', linkHeader(entryFileLinks(entry, publicUrl)));
   const file = entryForms.find(({ media }) => media === form);
   if (file) {
     res
