@@ -100,6 +100,7 @@ export interface Contract {
   Decision: Decision;
   DraftBody: DraftBody;
   EntryExport: EntryExport;
+  EntryImage: EntryImage;
   EntryRevision: EntryRevision;
   Entry: Entry;
   ExportEnd: ExportEnd;
@@ -113,11 +114,18 @@ export interface Contract {
   Problem: Problem;
   ReasonCode: ReasonCode;
   Reference: Reference;
+  RefinementObstacle: RefinementObstacle;
+  RefinementRequest: RefinementRequest;
+  Refinement: Refinement;
   Registration: Registration;
+  ReleaseList: ReleaseList;
+  ReleaseRequest: ReleaseRequest;
+  Release: Release;
   ReviewState: ReviewState;
   Role: Role;
   SectionChoice: SectionChoice;
   Section: Section;
+  SessionChange: SessionChange;
   Session: Session;
   SignIn: SignIn;
   Stability: Stability;
@@ -178,6 +186,10 @@ export interface CheckReport {
      * directions in which the orbit belongs to a family
      */
     freeDirections: number;
+    /**
+     * second Newton correction over the first: below 0.25 the start is well inside the basin; null where the first was rounding
+     */
+    basinRatio: number | null;
   } | null;
   orbit: CheckedOrbit | null;
   findings: Finding[];
@@ -261,6 +273,10 @@ export interface CheckedOrbit {
      * difference of Σ log|multiplier| from the integral of the divergence
      */
     liouville: number | null;
+    /**
+     * largest |log|multiplier| + log|partner|| of reciprocal pairs; null where the flow is neither Hamiltonian nor the orbit reversible
+     */
+    pairing: number | null;
   };
   stability: Stability;
   unstableDirections: number;
@@ -327,6 +343,16 @@ export interface CheckRequest {
    */
   point: TypedNumber[];
   /**
+   * section points of the returns but the last, in order of time: for orbits so unstable that one point does not identify them
+   *
+   * @maxItems 4999
+   */
+  points?: TypedNumber[][];
+  /**
+   * in a family: the variable or invariant that keeps its value while the rest is corrected
+   */
+  hold?: string;
+  /**
    * counted crossings with 0 < t ≤ T
    */
   returns?: number;
@@ -354,7 +380,7 @@ export interface CheckRequest {
       }
   )[];
   /**
-   * correct digits asked for
+   * correct digits asked for; with an account only
    */
   digits?: number;
   /**
@@ -582,6 +608,10 @@ export interface Check {
      * directions in which the orbit belongs to a family
      */
     freeDirections: number;
+    /**
+     * second Newton correction over the first: below 0.25 the start is well inside the basin; null where the first was rounding
+     */
+    basinRatio: number | null;
   } | null;
   orbit: CheckedOrbit | null;
   findings: Finding[] | null;
@@ -742,6 +772,10 @@ export interface Entry {
      * directions in which the orbit belongs to a family
      */
     freeDirections: number;
+    /**
+     * second Newton correction over the first: below 0.25 the start is well inside the basin; null where the first was rounding
+     */
+    basinRatio: number | null;
   } | null;
   verdict: Verdict;
   findings: Finding[];
@@ -749,6 +783,14 @@ export interface Entry {
     level: 're-integrated' | 'refined' | 'proved';
     digits: number;
     engine: string;
+    /**
+     * what the refinement held where the orbit belongs to a family; null where it is isolated or not refined
+     */
+    held: string | null;
+    /**
+     * why the last refinement that was tried gave no more digits; null where none failed
+     */
+    obstacle: RefinementObstacle | null;
   };
   submitted: SubmissionBody;
   contributor: {
@@ -785,6 +827,20 @@ export interface Section {
   formula: string;
 }
 /**
+ * Why an orbit could not be computed to the digits asked for.
+ */
+export interface RefinementObstacle {
+  /**
+   * digits that were asked for
+   */
+  digits: number;
+  reason: 'not-closed' | 'not-converged' | 'too-long' | 'too-unstable' | 'out-of-domain' | 'withdrawn';
+  /**
+   * one sentence
+   */
+  message: string;
+}
+/**
  * One periodic orbit as a contributor states it.
  */
 export interface SubmissionBody {
@@ -806,6 +862,16 @@ export interface SubmissionBody {
    * @maxItems 16
    */
   point: TypedNumber[];
+  /**
+   * section points of the returns but the last, in order of time: for orbits so unstable that one point does not identify them
+   *
+   * @maxItems 4999
+   */
+  points?: TypedNumber[][];
+  /**
+   * in a family: the variable or invariant that keeps its value while the rest is corrected
+   */
+  hold?: string;
   /**
    * counted crossings with 0 < t ≤ T
    */
@@ -834,7 +900,7 @@ export interface SubmissionBody {
       }
   )[];
   /**
-   * correct digits asked for
+   * correct digits asked for; with an account only
    */
   digits?: number;
   /**
@@ -844,13 +910,36 @@ export interface SubmissionBody {
   note?: string;
 }
 /**
+ * An entry that is another's image under a symmetry of their system.
+ */
+export interface EntryImage {
+  accession: string;
+  /**
+   * its name in the system's document
+   */
+  symmetry: string;
+}
+/**
  * One revision of an entry.
  */
 export interface EntryRevision {
   revision: number;
   at: string;
+  /**
+   * who made it; null: the archive itself
+   */
   by: string | null;
   why: string;
+  evidence: {
+    level: 're-integrated' | 'refined' | 'proved';
+    digits: number;
+  };
+  links: {
+    /**
+     * the entry as it was in this revision
+     */
+    self: string;
+  };
 }
 /**
  * Last line of an NDJSON export.
@@ -895,6 +984,16 @@ export interface OrbitPage {
     value: number;
     relation: 'exact' | 'at-least';
   };
+  /**
+   * how many are left when entries that are each other's images count once; null where none are, and without a system
+   */
+  upToSymmetry: {
+    value: number;
+    /**
+     * names of the symmetries that map results onto each other
+     */
+    symmetries: string[];
+  } | null;
   /**
    * with include=incipit: accession → the drawn coordinate along the flow as [time, value] pairs
    */
@@ -980,6 +1079,50 @@ export interface SubmissionEvent {
   comment: string | null;
 }
 /**
+ * Compute an entry's point, period and return times to more digits than doubles hold.
+ */
+export interface RefinementRequest {
+  /**
+   * correct digits asked for
+   */
+  digits: number;
+}
+/**
+ * The computation of an entry to many digits: waiting, running, or done with a revision or with the reason why there is none.
+ */
+export interface Refinement {
+  id: string;
+  accession: string;
+  /**
+   * correct digits asked for
+   */
+  digits: number;
+  /**
+   * `failed` is a crash of the machinery; an orbit that has no more digits is `done` with an obstacle
+   */
+  state: 'queued' | 'running' | 'done' | 'failed';
+  /**
+   * whether the archive asked by itself, as it does for every accepted entry
+   */
+  askedBySystem: boolean;
+  /**
+   * the revision that has these digits
+   */
+  revision: number | null;
+  obstacle: RefinementObstacle | null;
+  /**
+   * what happened, where the machinery broke
+   */
+  failure: string | null;
+  computeMs: number;
+  createdAt: string;
+  finishedAt: string | null;
+  links: {
+    self: string;
+    entry: string;
+  };
+}
+/**
  * A new account.
  */
 export interface Registration {
@@ -992,6 +1135,79 @@ export interface Registration {
   orcid?: string;
 }
 /**
+ * All releases, the newest first.
+ */
+export interface ReleaseList {
+  items: Release[];
+}
+/**
+ * A dated copy of the whole catalogue that never changes.
+ */
+export interface Release {
+  id: number;
+  /**
+   * `cutting` until its files are written
+   */
+  state: 'cutting' | 'ready' | 'failed';
+  note: string;
+  cutBy: string;
+  askedAt: string;
+  cutAt: string | null;
+  /**
+   * the release that the changes are counted from
+   */
+  previous: number | null;
+  entries: number | null;
+  /**
+   * since the release before
+   */
+  changes: {
+    added: number;
+    revised: number;
+    withdrawn: number;
+  } | null;
+  files: ReleaseFile[];
+  /**
+   * one sentence; null until it is ready
+   */
+  citation: string | null;
+  licence: string;
+  caution: string;
+  /**
+   * why it could not be cut
+   */
+  failure: string | null;
+  links: {
+    self: string;
+    page: string;
+  };
+}
+export interface ReleaseFile {
+  name: string;
+  mediaType: string;
+  bytes: number;
+  sha256: string;
+  href: string;
+}
+/**
+ * Cut a release.
+ */
+export interface ReleaseRequest {
+  /**
+   * what readers should know of it
+   */
+  note?: string;
+}
+/**
+ * Change what one has chosen for oneself.
+ */
+export interface SessionChange {
+  /**
+   * the daily mail about new submissions
+   */
+  digest: boolean;
+}
+/**
  * Who am I.
  */
 export interface Session {
@@ -1000,6 +1216,10 @@ export interface Session {
    * what waits for this person on the Desk
    */
   waiting: number;
+  /**
+   * whether this person gets the daily mail about new submissions; null for those who are no curator
+   */
+  digest: boolean | null;
   /**
    * the outbox is readable on this server
    */

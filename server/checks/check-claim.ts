@@ -3,7 +3,9 @@ import { type CheckProgress } from '@/server/checks/check-progress';
 import { type Claim } from '@/server/checks/claim';
 import { multiplierClaims, returnClaims } from '@/server/checks/claims';
 import { correctedAsClosed, typedAsClosed } from '@/server/checks/closed-orbit';
+import { closesLater, partOfPeriod } from '@/server/checks/closes-later';
 import { convergence } from '@/server/checks/convergence';
+import { correctClaim } from '@/server/checks/correct-claim';
 import { decimalOf } from '@/server/checks/decimal-of';
 import { digitsOf, expectedClosure, tooFewDigits } from '@/server/checks/digits';
 import { equilibrium } from '@/server/checks/equilibrium';
@@ -13,6 +15,8 @@ import { alreadyKnown, matchOrbits, type CatalogueOrbit } from '@/server/checks/
 import { noReturn } from '@/server/checks/no-return';
 import { primePeriod, primeReturns } from '@/server/checks/prime';
 import { rawRun, returnsToSection, type RunControl } from '@/server/checks/raw-run';
+import { repeatSurvey } from '@/server/checks/repeat-survey';
+import { repeatedOrbit, type RepeatedOrbit } from '@/server/checks/repeated-orbit';
 import { checkedOrbit, closureOf, correctionOf, emptyReport } from '@/server/checks/report';
 import { runFailure } from '@/server/checks/run-failure';
 import { selfCheck } from '@/server/checks/self-check';
@@ -23,7 +27,6 @@ import { SuggestionFinder } from '@/server/checks/suggestion';
 import { surveyOrbit } from '@/server/checks/survey-orbit';
 import { isTangent, transversalityFindings } from '@/server/checks/transversality';
 import { shiftsOf, verdictOf } from '@/server/checks/verdict';
-import { correctOrbit } from '@/server/numerics/periodic/correct-orbit';
 import { smallestTransversality } from '@/server/numerics/periodic/smallest-transversality';
 
 type Answer = Omit<CheckReport, 'engine'>;
@@ -88,18 +91,13 @@ export class ClaimCheck {
   }
 
   /** Newton, and the verdict. */
-  private correction(raw: RawRun): Answer {
+  private correction(typed: RawRun): Answer {
     const { claim, control } = this;
-    const correction = correctOrbit({
-      flow: claim.flow,
-      start: raw.start,
-      period: claim.period.value,
-      stepEnds: raw.stepEnds,
-      sizes: raw.sizes,
-      moduli: claim.moduli,
-      maxSteps: control.maxSteps,
-      shouldStop: control.shouldStop,
-      onIteration: (iteration) => this.report({ phase: 'correcting', iteration }, raw),
+    const repeated = typed.relative <= claim.tolerance ? null : repeatedOrbit(claim, typed, this.runControl());
+    if (repeated !== null) return this.repetition(typed, repeated);
+    const { raw, correction } = correctClaim(claim, typed, {
+      ...this.runControl(),
+      onIteration: (iteration) => this.report({ phase: 'correcting', iteration }, typed),
     });
     this.steps += correction.steps;
     const failure = correction.converged ? null : correction.failure;
@@ -115,8 +113,25 @@ export class ClaimCheck {
         ? typedAsClosed(claim, raw, this.runControl())
         : null;
     const survey = closed === null ? null : surveyOrbit(claim, closed);
-    const returns = survey?.crossings.length ?? raw.returnsInside;
-    this.report({ phase: 'measuring', iteration: correction.iterations, returns }, raw);
+    if (survey !== null && (verdict === 'does-not-close' || isTangent(survey))) {
+      survey.primeReturns = survey.crossings.length;
+    } else if (survey !== null) survey.primeReturns = primeReturns(claim, raw, survey, this.runControl());
+    const expected = expectedClosure(claim, raw, correction.typed);
+    return this.findings({ claim, raw, correction, shifts, verdict, survey, expectedClosure: expected });
+  }
+
+  /** An orbit that is run through several times and so unstable that only the first turns show it. */
+  private repetition(typed: RawRun, { turns, raw: turn, orbit }: RepeatedOrbit): Answer {
+    const { claim } = this;
+    this.steps += turn.stepEnds.length + orbit.steps;
+    const raw = { ...typed, sizes: turn.sizes };
+    const rounds = Array.from({ length: turns }, () => orbit.typed);
+    const correction = { ...orbit, period: turns * orbit.period, typed: rounds.flat() };
+    const shifts = shiftsOf(claim, raw, correction);
+    const verdict = verdictOf(claim.tolerance, raw, shifts);
+    const measured = surveyOrbit(claim, correctedAsClosed(claim, turn, orbit));
+    if (measured !== null) measured.primeReturns = primeReturns(claim, turn, measured, this.runControl());
+    const survey = measured === null ? null : repeatSurvey(measured, turns);
     const expected = expectedClosure(claim, raw, correction.typed);
     return this.findings({ claim, raw, correction, shifts, verdict, survey, expectedClosure: expected });
   }
@@ -124,14 +139,15 @@ export class ClaimCheck {
   /** Everything that is said about a closed or nearly closed orbit. */
   private findings(study: Study): Answer {
     const { claim, raw, correction, shifts, verdict, survey } = study;
+    const returns = survey?.crossings.length ?? raw.returnsInside;
+    this.report({ phase: 'measuring', iteration: correction.iterations, returns }, raw);
     const isOpen = verdict === 'does-not-close';
     const few = tooFewDigits(study);
-    const findings = [...few, ...(few.length > 0 ? [] : convergence(study))];
+    const turns = isOpen && few.length === 0 ? closesLater(claim, raw, this.runControl()) : null;
+    const findings = [...few, ...(few.length > 0 ? [] : turns === null ? convergence(study) : partOfPeriod(turns))];
     if (survey === null) findings.push(...this.tangency(raw));
     else {
-      if (isOpen || isTangent(survey)) survey.primeReturns = survey.crossings.length;
-      else survey.primeReturns = primeReturns(claim, raw, survey, this.runControl());
-      findings.push(...(isOpen ? [] : this.ofClosed(survey)), ...selfCheck(survey));
+      findings.push(...(isOpen ? primePeriod(survey) : this.ofClosed(survey)), ...selfCheck(survey));
       findings.push(...stiffness(raw.stepEnds.length, survey.crossings.length));
     }
     const matches = this.matches(study);
@@ -139,12 +155,12 @@ export class ClaimCheck {
     return this.answer({
       ...this.ofRaw(raw, findings),
       verdict,
-      correction: correction.converged && shifts !== null ? correctionOf(correction, shifts) : null,
+      correction: correction.converged && shifts !== null ? correctionOf(correction, shifts, claim.hold) : null,
       orbit: survey === null ? null : checkedOrbit(survey),
       matches,
       digits: digitsOf(study),
       expectedClosure: study.expectedClosure,
-      suggestion: this.suggestionFor(study),
+      suggestion: this.suggestionFor(study, turns),
     });
   }
 
@@ -168,8 +184,9 @@ export class ClaimCheck {
     return matchOrbits(this.claim, survey, this.control.catalogue);
   }
 
-  private suggestionFor(study: Study): CheckReport['suggestion'] {
+  private suggestionFor(study: Study, turns: number | null): CheckReport['suggestion'] {
     const { survey, verdict, raw } = study;
+    if (turns !== null) return this.suggestions().wholePeriod(turns);
     if (verdict === 'does-not-close') return this.suggestions().forOpenOrbit(study);
     if (survey === null || survey.primeReturns === survey.crossings.length) return null;
     return this.suggestions().primePeriod(raw.start, survey.crossings[survey.primeReturns - 1]!.time);

@@ -1,3 +1,4 @@
+import { type HeldQuantity } from '@/server/numerics/periodic/correct-orbit';
 import { type Flow } from '@/server/numerics/taylor/flow';
 
 /** A number as typed: its nearest double and half of its last typed place (0 where it is exact). */
@@ -21,6 +22,11 @@ export interface Symmetry {
   outputs: number[];
 }
 
+/** The quantity that a family's correction is to keep, at its value at the typed point. */
+export interface Hold extends HeldQuantity {
+  name: string;
+}
+
 /** An orbit as stated, its text read and its system compiled. */
 export interface Claim {
   variables: string[];
@@ -34,6 +40,9 @@ export interface Claim {
   /** −u as a formula. */
   negatedSection: string;
   point: TypedValue[];
+  /** Section points of the returns but the last; null where none are stated. */
+  points: TypedValue[][] | null;
+  hold: Hold | null;
   period: TypedValue;
   returns: number | null;
   returnTimes: TypedValue[] | null;

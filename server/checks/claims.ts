@@ -10,10 +10,10 @@ import { withoutTrivial } from '@/server/checks/survey-orbit';
 const MULTIPLIER_ACCURACY = 1e-8;
 
 /** Compare the number of returns and the return times that were stated with those found. */
-export function returnClaims({ returns, returnTimes, tolerance }: Claim, survey: Survey): Finding[] {
+export function returnClaims({ returns, returnTimes, points, tolerance }: Claim, survey: Survey): Finding[] {
   const found = survey.crossings.length;
   const findings: Finding[] = [];
-  const stated = returns ?? returnTimes?.length ?? found;
+  const stated = returns ?? returnTimes?.length ?? (points === null ? found : points.length + 1);
   if (stated !== found) {
     findings.push(
       finding('returns-differ', {

@@ -22,9 +22,10 @@ export const DIGITS_HALF_UNITS = 10;
 export const SAME_ORBIT = 1e-8;
 export const SAME_ORBIT_TOLERANCES = 10;
 
-/** Largest miss of M f = f and of Liouville's formula in a sound computation. */
+/** Largest miss of M f = f, of Liouville's formula and of reciprocal pairs in a sound computation. */
 export const SELF_CHECK_FLOW = 1e-8;
 export const SELF_CHECK_LIOUVILLE = 1e-6;
+export const SELF_CHECK_PAIRING = 1e-6;
 
 /** Largest change of an invariant along the orbit, as a share of what it varies by over the orbit's sizes. */
 export const INVARIANT_DRIFT = 1e-8;

@@ -27,6 +27,7 @@ export function primeReturns(claim: Claim, raw: RawRun, survey: Survey, control:
     stepEnds: [...raw.stepEnds.filter((time) => time < period), period],
     sizes: survey.sizes,
     moduli: claim.moduli,
+    hold: claim.hold ?? undefined,
     maxSteps: control.maxSteps,
     shouldStop: control.shouldStop,
   });

@@ -1,5 +1,5 @@
 import { type CheckRequest, type TypedNumber } from '@/schemas/generated/contract';
-import { type Claim, type NamedOutput, type Symmetry, type TypedValue } from '@/server/checks/claim';
+import { type Claim, type Hold, type NamedOutput, type Symmetry, type TypedValue } from '@/server/checks/claim';
 import { RETURNS_LARGEST, TOLERANCE_DEFAULT, TOLERANCE_LARGEST, TOLERANCE_SMALLEST } from '@/server/checks/limits';
 import { type CheckedSection, type CheckedSystem, type ContentError } from '@/server/formulas/checked-system';
 import { ErrorList, segment } from '@/server/formulas/error-list';
@@ -12,8 +12,21 @@ import { createFlow, type Flow } from '@/server/numerics/taylor/flow';
 /** The members of a submission or of a check that state the orbit. */
 export type ClaimBody = Pick<
   CheckRequest,
-  'parameters' | 'section' | 'point' | 'returns' | 'period' | 'returnTimes' | 'itinerary' | 'tolerance' | 'multipliers'
+  | 'parameters'
+  | 'section'
+  | 'point'
+  | 'points'
+  | 'hold'
+  | 'returns'
+  | 'period'
+  | 'returnTimes'
+  | 'itinerary'
+  | 'tolerance'
+  | 'multipliers'
 >;
+
+/** Share of a coordinate over which the slope of a held invariant is taken: its square is what the slope is off by. */
+const SLOPE_STEP = 1e-5;
 
 /** A claim that can be checked, or everything in the body that prevents it. */
 export type ReadClaim = { ok: true; claim: Claim } | { ok: false; errors: ContentError[] };
@@ -41,18 +54,23 @@ class ClaimReader {
     const parameters = this.parameters();
     const parsed = parseSection(system, body.section);
     if (!parsed.ok) list.errors.push(...parsed.errors);
-    const point = this.point();
+    const point = this.coordinates('/point', body.point);
+    const points = this.points();
     const period = this.positive('/period', body.period);
     const returnTimes = body.returnTimes?.map((time, i) => this.positive(`/returnTimes/${i}`, time)) ?? null;
     const multipliers = this.multipliers();
     const tolerance = this.tolerance();
     this.returns();
+    this.held();
     if (!parsed.ok || period === null || list.errors.length > 0) return { ok: false, errors: list.errors };
+    const stated = claimedSystem(system, parsed.section, parameters);
     return {
       ok: true,
       claim: {
-        ...claimedSystem(system, parsed.section, parameters),
+        ...stated,
         point,
+        points,
+        hold: body.hold === undefined ? null : holdOf(body.hold, stated, point),
         period,
         returns: body.returns ?? null,
         returnTimes: returnTimes?.filter((time) => time !== null) ?? null,
@@ -75,17 +93,34 @@ class ClaimReader {
     return values;
   }
 
-  private point(): TypedValue[] {
+  private coordinates(path: string, point: readonly TypedNumber[]): TypedValue[] {
     const { variables } = this.system;
-    const { point } = this.body;
     if (point.length !== variables.length) {
       const names = variables.map(({ name }) => name).join(', ');
+      this.list.add(path, `The point has ${point.length} coordinates; the system has ${variables.length}: ${names}.`);
+    }
+    return point.flatMap((typed, i) => this.list.number(`${path}/${i}`, typed) ?? []);
+  }
+
+  private points(): TypedValue[][] | null {
+    const { points, returns, returnTimes } = this.body;
+    if (points === undefined || points.length === 0) return null;
+    const stated = returns ?? returnTimes?.length;
+    if (stated !== undefined && points.length !== stated - 1) {
       this.list.add(
-        '/point',
-        `The point has ${point.length} coordinates; the system has ${variables.length}: ${names}.`,
+        '/points',
+        `${stated} returns have ${stated - 1} section points between the start and the end; ${points.length} are stated.`,
       );
     }
-    return point.flatMap((typed, i) => this.list.number(`/point/${i}`, typed) ?? []);
+    return points.map((point, k) => this.coordinates(`/points/${k}`, point));
+  }
+
+  private held(): void {
+    const { hold } = this.body;
+    const { variables, invariants } = this.system;
+    const names = [...variables, ...invariants].map(({ name }) => name);
+    if (hold === undefined || names.includes(hold)) return;
+    this.list.add('/hold', `Only a variable or an invariant can be held: ${names.join(', ')}. ${hold} is neither.`);
   }
 
   private positive(path: string, typed: TypedNumber): TypedValue | null {
@@ -160,6 +195,28 @@ function claimedSystem(
     negatedSection: formatFormula(negated(section.expression)),
     ...{ letters, invariants, symmetries },
   };
+}
+
+/** What is to be held, a variable before an invariant of the same name. */
+function holdOf(name: string, { variables, flow, invariants }: SystemPart, point: readonly TypedValue[]): Hold {
+  const start = Float64Array.from(point, ({ value }) => value);
+  const index = variables.indexOf(name);
+  if (index >= 0) {
+    const axis = start.map((_, i) => (i === index ? 1 : 0));
+    return { name, target: start[index]!, at: (x) => x[index]!, gradientAt: () => axis };
+  }
+  const { output } = invariants.find((invariant) => invariant.name === name)!;
+  const at = (x: Float64Array): number => flow.outputs(x)[output]!;
+  return { name, target: at(start), at, gradientAt: (x) => slopesOf(at, x) };
+}
+
+/** Central differences: Newton, which uses them, needs a few digits, and reaches the value whatever they are. */
+function slopesOf(at: (x: Float64Array) => number, x: Float64Array): Float64Array {
+  return x.map((value, i) => {
+    const step = SLOPE_STEP * Math.max(1, Math.abs(value));
+    const beside = (distance: number): number => at(x.map((entry, j) => (j === i ? entry + distance : entry)));
+    return (beside(step) - beside(-step)) / (2 * step);
+  });
 }
 
 function negated(u: Expression): Expression {

@@ -1,4 +1,5 @@
 import { type CheckedOrbit, type CheckReport } from '@/schemas/generated/contract';
+import { type Hold } from '@/server/checks/claim';
 import { decimalOf } from '@/server/checks/decimal-of';
 import { multiplierDecimals } from '@/server/checks/multiplier-decimals';
 import { type RawRun, type Shifts, type Survey } from '@/server/checks/study';
@@ -25,19 +26,25 @@ export function closureOf({ absolute, relative }: RawRun, tolerance: number): Ch
 }
 
 /** What the correction did. */
-export function correctionOf(corrected: CorrectedOrbit, shifts: Shifts): CheckReport['correction'] {
-  const family = corrected.freeDirections > 0;
+export function correctionOf(corrected: CorrectedOrbit, shifts: Shifts, hold: Hold | null): CheckReport['correction'] {
   return {
     iterations: corrected.iterations,
     shift: shifts.point,
     periodShift: shifts.period,
     residual: corrected.residual,
     segments: corrected.plan.length,
-    held: family
-      ? 'the point, as near as its family allows; the period is free'
-      : 'the section; point and period are free',
+    held: heldWords(corrected, hold),
     freeDirections: corrected.freeDirections,
+    basinRatio: corrected.basinRatio,
   };
+}
+
+/** What was held, in words. */
+function heldWords({ freeDirections, isHeld }: CorrectedOrbit, hold: Hold | null): string {
+  if (freeDirections === 0) return 'the section; point and period are free';
+  const near = 'the point, as near as its family allows; the period is free';
+  if (hold === null) return near;
+  return isHeld ? `${hold.name}, and ${near}` : `${near} (${hold.name} does not change along the family)`;
 }
 
 /** The orbit as found, figures as decimals. */
@@ -57,7 +64,7 @@ export function checkedOrbit(survey: Survey): CheckedOrbit {
     multipliers: nontrivial.map(multiplierDecimals),
     unitMultipliers: survey.unitMultipliers,
     exponents: nontrivial.map(({ logModulus }) => Math.max(-Number.MAX_VALUE, logModulus / survey.period)),
-    selfCheck: { flow: survey.flowCheck, liouville: survey.liouville },
+    selfCheck: { flow: survey.flowCheck, liouville: survey.liouville, pairing: survey.pairing },
     stability: survey.stability,
     unstableDirections: survey.unstableDirections,
     itinerary: survey.itinerary,

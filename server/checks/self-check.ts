@@ -1,11 +1,11 @@
 import { type Finding } from '@/schemas/generated/contract';
 import { figure } from '@/server/checks/figure';
 import { finding } from '@/server/checks/finding';
-import { SELF_CHECK_FLOW, SELF_CHECK_LIOUVILLE } from '@/server/checks/limits';
+import { SELF_CHECK_FLOW, SELF_CHECK_LIOUVILLE, SELF_CHECK_PAIRING } from '@/server/checks/limits';
 import { type Survey } from '@/server/checks/study';
 
-/** Check the computation against what must hold for any flow: M f = f and Liouville's formula. */
-export function selfCheck({ flowCheck, liouville }: Survey): Finding[] {
+/** Check the computation against what must hold: M f = f, Liouville's formula and, where they are due, reciprocal pairs. */
+export function selfCheck({ flowCheck, liouville, pairing }: Survey): Finding[] {
   const findings: Finding[] = [];
   if (!(flowCheck <= SELF_CHECK_FLOW)) {
     findings.push(
@@ -26,6 +26,17 @@ export function selfCheck({ flowCheck, liouville }: Survey): Finding[] {
           `(at most ${figure(SELF_CHECK_LIOUVILLE)}). The multipliers cannot be trusted.`,
         value: liouville,
         limit: SELF_CHECK_LIOUVILLE,
+      }),
+    );
+  }
+  if (pairing !== null && !(pairing <= SELF_CHECK_PAIRING)) {
+    findings.push(
+      finding('self-check-failed', {
+        message:
+          `The multipliers of this orbit come in reciprocal pairs; the logarithms of those found miss that by ` +
+          `${figure(pairing)} (at most ${figure(SELF_CHECK_PAIRING)}). They cannot be trusted.`,
+        value: pairing,
+        limit: SELF_CHECK_PAIRING,
       }),
     );
   }

@@ -44,6 +44,8 @@ export interface Survey {
   unstableDirections: number;
   flowCheck: number;
   liouville: number | null;
+  /** Largest |log|λ| + log|partner||; null where multipliers need not come in reciprocal pairs. */
+  pairing: number | null;
   smallest: SmallestTransversality;
   transversalities: number[];
   itinerary: string | null;

@@ -14,8 +14,14 @@ const LARGEST_PERIOD_FACTOR = 3;
 /** An exchanged period is integrated only where an orbit of about that period is known, or there are few. */
 const MOST_SWAPS_TRIED = 24;
 
+/** Steps of the integrator that all tries together may take: an offer is worth no more than the check itself. */
+const MOST_STEPS = 20_000;
+
 /** Tries changes to one field of a claim by integrating them. */
 export class SuggestionFinder {
+  /** Steps that are left for trying. */
+  private left = MOST_STEPS;
+
   constructor(
     private readonly claim: Claim,
     private readonly control: RunControl,
@@ -30,6 +36,11 @@ export class SuggestionFinder {
   /** The prime period, for an orbit that is run through more than once. */
   primePeriod(start: Float64Array, period: number): Suggestion | null {
     return this.tried({ field: 'period', value: decimalOf(period) }, { start, period });
+  }
+
+  /** The whole period, for an orbit that closes after some stated ones. */
+  wholePeriod(turns: number): Suggestion {
+    return { field: 'period', value: decimalOf(turns * this.claim.period.value), verdict: 'closes' };
   }
 
   /** For an orbit that does not close: two digits of the period exchanged, else the corrected period or point alone. */
@@ -62,7 +73,10 @@ export class SuggestionFinder {
     change: { field: string; value: string | string[] },
     orbit: { start: Float64Array; period: number },
   ): Suggestion | null {
-    const run = rawRun(this.claim, { ...orbit, onSection: true }, this.control);
+    if (this.left <= 0) return null;
+    const maxSteps = Math.min(this.control.maxSteps, this.left);
+    const run = rawRun(this.claim, { ...orbit, onSection: true }, { ...this.control, maxSteps });
+    this.left -= run.ok ? run.stepEnds.length : run.steps;
     if (!run.ok) return null;
     const verdict: Verdict = verdictOf(this.claim.tolerance, run, null);
     return verdict === 'closes' ? { ...change, verdict } : null;

@@ -4,6 +4,7 @@ import { itineraryOf } from '@/server/checks/itinerary';
 import { invariantsAlong } from '@/server/checks/invariants';
 import { SAME_ORBIT } from '@/server/checks/limits';
 import { orbitMultipliers } from '@/server/checks/orbit-multipliers';
+import { pairing } from '@/server/checks/pairing';
 import { type Survey } from '@/server/checks/study';
 import { multiplyMatrices } from '@/server/numerics/linear/multiply-matrices';
 import { type Multiplier } from '@/server/numerics/periodic/floquet-multipliers';
@@ -42,11 +43,12 @@ export function surveyOrbit(claim: Claim, orbit: ClosedOrbit): Survey | null {
     extent: Array.from(lowest, (low, i) => [low, highest[i]!]),
     ...judgeStability({
       multipliers: withoutTrivial(multipliers),
-      accuracy: Math.max(CIRCLE_FLOOR, CIRCLE_ROUNDING * wholeNorm(orbit)),
+      accuracy: Math.max(CIRCLE_FLOOR, CIRCLE_ROUNDING * growthOf(orbit)),
       divergenceIntegral: orbit.divergenceIntegral,
     }),
     flowCheck: flowCheck(flow, orbit),
     liouville: liouville(multipliers, orbit.divergenceIntegral),
+    pairing: pairing(claim, orbit, { multipliers, crossings }),
     smallest: smallestTransversality(flow, { zeros, nearMisses: watch.nearMisses }, sizes),
     transversalities: points.map((point) => transversality(flow, point, sizes)),
     itinerary: itineraryOf(claim, points),
@@ -65,22 +67,18 @@ function isUnit({ re, im, logModulus }: Multiplier): boolean {
   return re === 1 && im === 0 && logModulus === 0;
 }
 
-/** Norm of the whole derivative, in sizes. */
-function wholeNorm({ segments, sizes }: ClosedOrbit): number {
-  const n = sizes.length;
-  const whole = segments
-    .map(({ monodromy }) => scaleMatrix(monodromy!, sizes))
-    .reduce((earlier, later) => multiplyMatrices(later, earlier, n, n));
-  return frobeniusNorm(whole);
+/** Norms of the segments' derivatives together, in sizes: what the rounding of one step can grow to in the multipliers. */
+function growthOf({ segments, sizes }: ClosedOrbit): number {
+  return segments.reduce((sum, { monodromy }) => sum + frobeniusNorm(scaleMatrix(monodromy!, sizes)), 0);
 }
 
 /** Largest ‖M f(start) − f(end)‖ / (‖M‖ ‖f(start)‖) of the segments, in sizes. */
 function flowCheck(flow: Flow, { segments, sizes }: ClosedOrbit): number {
   const n = sizes.length;
   let largest = 0;
-  for (const { starts, end, monodromy } of segments) {
+  for (const { starts, derivedEnd, monodromy } of segments) {
     const before = flow.field(starts[0]!).map((entry, i) => entry / sizes[i]!);
-    const after = flow.field(end).map((entry, i) => entry / sizes[i]!);
+    const after = flow.field(derivedEnd).map((entry, i) => entry / sizes[i]!);
     const m = scaleMatrix(monodromy!, sizes);
     const image = multiplyMatrices(m, before, n, n);
     const miss = Math.hypot(...image.map((entry, i) => entry - after[i]!));

@@ -15,7 +15,7 @@ const TRACE_POINTS_LARGEST = 20_000;
 const DRAWN_CLOSED = 1e-6;
 
 /** The orbit to be drawn. */
-export interface TracedOrbit extends ClaimBody {
+export interface TracedOrbit extends Omit<ClaimBody, 'points' | 'hold'> {
   /** Its crossings as a report or an entry lists them; the line is begun anew at each, so that it stays on the orbit. */
   crossings?: readonly { time: string; point: readonly string[] }[];
 }

@@ -2,6 +2,7 @@ import { type Claim } from '@/server/checks/claim';
 import { type RawRun, type Shifts, type Verdict } from '@/server/checks/study';
 import { type CorrectedOrbit, type FailedCorrection } from '@/server/numerics/periodic/correct-orbit';
 import { differenceSize } from '@/server/numerics/periodic/difference-size';
+import { orbitCrossings } from '@/server/numerics/periodic/orbit-crossings';
 import { periodDifferenceSize } from '@/server/numerics/periodic/period-difference-size';
 import { stateDifference } from '@/server/numerics/periodic/state-difference';
 
@@ -12,9 +13,19 @@ export function shiftsOf(claim: Claim, raw: RawRun, correction: CorrectedOrbit |
   const { difference } = stateDifference(correction.nodes[0]!, typed, claim.moduli);
   const period = claim.period.value;
   return {
-    point: differenceSize(difference, raw.sizes),
+    point: Math.max(differenceSize(difference, raw.sizes), shiftOfPoints(claim, raw, correction)),
     period: periodDifferenceSize(correction.period - period, period, raw.field, raw.sizes),
   };
+}
+
+/** How far the section points that were stated are from the corrected orbit's; 0 where it has another number of them. */
+function shiftOfPoints({ points, moduli }: Claim, { sizes }: RawRun, { watch, period, nodes }: CorrectedOrbit): number {
+  const found = points === null ? [] : orbitCrossings(watch.zeros, period, nodes[0]!);
+  if (points === null || found.length !== points.length + 1) return 0;
+  return points.reduce((size, point, k) => {
+    const typed = Float64Array.from(point, ({ value }) => value);
+    return Math.max(size, differenceSize(stateDifference(found[k]!.state, typed, moduli).difference, sizes));
+  }, 0);
 }
 
 /**

@@ -3,7 +3,7 @@ import type { GraphNode, Operation } from '@/server/numerics/expression/graph-no
 /** Integer powers up to this are multiplied out by repeated squaring, so that they are safe at 0. */
 const LARGEST_MULTIPLIED_POWER = 16;
 
-type Unary = 'exp' | 'log' | 'sin' | 'cos' | 'asin' | 'acos' | 'atan' | 'sqrt';
+export type Unary = 'exp' | 'log' | 'sin' | 'cos' | 'asin' | 'acos' | 'atan' | 'sqrt';
 
 interface Operands {
   a: number;
@@ -11,15 +11,14 @@ interface Operands {
   value?: number;
 }
 
-const folded: Record<Unary, (x: number) => number> = {
-  exp: Math.exp,
-  log: Math.log,
-  sin: Math.sin,
-  cos: Math.cos,
-  asin: Math.asin,
-  acos: Math.acos,
-  atan: Math.atan,
-  sqrt: Math.sqrt,
+export type BinaryOperation = 'add' | 'subtract' | 'multiply' | 'divide' | 'power';
+
+const binary: Record<BinaryOperation, (x: number, y: number) => number> = {
+  add: (x, y) => x + y,
+  subtract: (x, y) => x - y,
+  multiply: (x, y) => x * y,
+  divide: (x, y) => x / y,
+  power: (x, y) => x ** y,
 };
 
 /**
@@ -49,7 +48,8 @@ export class Graph {
 
   sum(a: number, b: number): number {
     const [x, y] = [this.constantOf(a), this.constantOf(b)];
-    if (x !== null && y !== null) return this.constant(x + y);
+    const folded = this.foldedOf('add', x, y);
+    if (folded !== null) return this.constant(folded);
     if (x === 0) return b;
     if (y === 0) return a;
     const [m, n] = [this.node(a), this.node(b)];
@@ -60,7 +60,8 @@ export class Graph {
 
   difference(a: number, b: number): number {
     const [x, y] = [this.constantOf(a), this.constantOf(b)];
-    if (x !== null && y !== null) return this.constant(x - y);
+    const folded = this.foldedOf('subtract', x, y);
+    if (folded !== null) return this.constant(folded);
     if (y === 0) return a;
     if (x === 0) return this.negative(b);
     const n = this.node(b);
@@ -79,7 +80,8 @@ export class Graph {
 
   product(a: number, b: number): number {
     const [x, y] = [this.constantOf(a), this.constantOf(b)];
-    if (x !== null && y !== null) return this.constant(x * y);
+    const folded = this.foldedOf('multiply', x, y);
+    if (folded !== null) return this.constant(folded);
     if (x === 0 || y === 0) return this.constant(0);
     if (x === 1) return b;
     if (y === 1) return a;
@@ -94,7 +96,8 @@ export class Graph {
 
   square(a: number): number {
     const x = this.constantOf(a);
-    if (x !== null) return this.constant(x * x);
+    const folded = this.foldedOf('multiply', x, x);
+    if (folded !== null) return this.constant(folded);
     const n = this.node(a);
     if (n.operation === 'negate') return this.square(n.a);
     if (n.operation === 'sqrt') return n.a;
@@ -103,7 +106,8 @@ export class Graph {
 
   quotient(a: number, b: number): number {
     const [x, y] = [this.constantOf(a), this.constantOf(b)];
-    if (x !== null && y !== null) return this.constant(x / y);
+    const folded = this.foldedOf('divide', x, y);
+    if (folded !== null) return this.constant(folded);
     if (y === 1 || x === 0) return a;
     const n = this.node(b);
     if (!n.isStatic && n.operation === 'power') return this.product(a, this.power(n.a, this.negative(n.b)));
@@ -123,7 +127,8 @@ export class Graph {
 
   unary(operation: Unary, a: number): number {
     const x = this.constantOf(a);
-    if (x !== null) return this.constant(folded[operation](x));
+    const folded = x === null ? null : this.foldUnary(operation, x);
+    if (folded !== null) return this.constant(folded);
     const { isStatic } = this.node(a);
     if (isStatic) return this.add(operation, { a }, true);
     switch (operation) {
@@ -152,9 +157,22 @@ export class Graph {
     return node;
   }
 
+  /** What an operation on two constants is folded to; null where it stays an operation. */
+  protected fold(operation: BinaryOperation, x: number, y: number): number | null {
+    return binary[operation](x, y);
+  }
+
+  protected foldUnary(operation: Unary, x: number): number | null {
+    return Math[operation](x);
+  }
+
+  private foldedOf(operation: BinaryOperation, x: number | null, y: number | null): number | null {
+    return x === null || y === null ? null : this.fold(operation, x, y);
+  }
+
   private constantPower(a: number, exponent: number): number {
-    const x = this.constantOf(a);
-    if (x !== null) return this.constant(x ** exponent);
+    const folded = this.foldedOf('power', this.constantOf(a), exponent);
+    if (folded !== null) return this.constant(folded);
     if (exponent === 0) return this.constant(1);
     const n = this.node(a);
     // The power of a root is one power of what stands under it: each force law becomes a single series.

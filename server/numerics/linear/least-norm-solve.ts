@@ -16,7 +16,8 @@ export interface LeastNormProblem {
  *
  *   x = Σ over σⱼ > cutOff·σ_max of vⱼ (uⱼ·b) / σⱼ
  *
- * @returns  x (length cols), the rank that was decided, and all singular values, descending.
+ * @returns  x (length cols), the rank that was decided, all singular values, descending, and an orthonormal basis of what
+ *           they leave open, cols × (cols − rank), row-major.
  * @throws {RangeError} when a shape does not fit or an entry is not finite.
  *
  * Accuracy: that of the singular values.
@@ -27,6 +28,7 @@ export function leastNormSolve(problem: LeastNormProblem): {
   x: Float64Array;
   rank: number;
   sigma: Float64Array;
+  open: Float64Array;
 } {
   const { a, rows, cols, b, cutOff } = problem;
   if (b.length !== rows) throw new RangeError(`${b.length} right-hand sides for ${rows} rows`);
@@ -42,5 +44,10 @@ export function leastNormSolve(problem: LeastNormProblem): {
     projection /= sigma[j]!;
     for (let i = 0; i < cols; i += 1) x[i]! += projection * v[i * cols + j]!;
   }
-  return { x, rank, sigma };
+  const width = cols - rank;
+  const open = new Float64Array(cols * width);
+  for (let i = 0; i < cols; i += 1) {
+    for (let j = 0; j < width; j += 1) open[i * width + j] = v[i * cols + rank + j]!;
+  }
+  return { x, rank, sigma, open };
 }

@@ -81,7 +81,7 @@ function rotation(
   if (Math.abs(gamma) <= ORTHOGONAL * Math.sqrt(alpha * beta)) return null;
   const zeta = (beta - alpha) / (2 * gamma);
   const t = (zeta < 0 ? -1 : 1) / (Math.abs(zeta) + Math.hypot(1, zeta));
-  const c = 1 / Math.hypot(1, t);
+  const c = 1 / Math.sqrt(1 + t * t);
   return { c, s: c * t };
 }
 
@@ -99,8 +99,13 @@ function rotateRows(
 }
 
 function sorted(w: Float64Array, v: Float64Array, rows: number, cols: number): SingularValues {
-  const norms = Array.from({ length: cols }, (_, j) => Math.hypot(...w.subarray(j * rows, (j + 1) * rows)));
-  const order = norms.map((_, j) => j).sort((i, j) => norms[j]! - norms[i]!);
+  const norms: number[] = [];
+  const order: number[] = [];
+  for (let j = 0; j < cols; j += 1) {
+    norms.push(rowNorm(w, j * rows, rows));
+    order.push(j);
+  }
+  order.sort((i, j) => norms[j]! - norms[i]!);
   const result = {
     u: new Float64Array(rows * cols),
     sigma: new Float64Array(cols),
@@ -113,4 +118,13 @@ function sorted(w: Float64Array, v: Float64Array, rows: number, cols: number): S
     for (let i = 0; i < cols; i += 1) result.v[i * cols + to] = v[from * cols + i]!;
   });
   return result;
+}
+
+function rowNorm(w: Float64Array, from: number, length: number): number {
+  let largest = 0;
+  for (let i = from; i < from + length; i += 1) largest = Math.max(largest, Math.abs(w[i]!));
+  if (largest === 0) return 0;
+  let sum = 0;
+  for (let i = from; i < from + length; i += 1) sum += (w[i]! / largest) ** 2;
+  return largest * Math.sqrt(sum);
 }

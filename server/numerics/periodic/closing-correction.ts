@@ -10,6 +10,14 @@ export interface LinearSection {
   value: number;
 }
 
+/** A quantity that is to keep its value while the orbit moves along its family, linearised, in sizes. */
+export interface LinearHold {
+  /** Gradient of the quantity times the sizes, n entries. */
+  gradient: Float64Array;
+  /** Its value at the point minus the one to be kept. */
+  value: number;
+}
+
 /** A correction of the first node and of the period. */
 export interface ClosingCorrection {
   /** Change of the first node, in sizes. */
@@ -18,24 +26,36 @@ export interface ClosingCorrection {
   theta: number;
   /** Dimension of the family that the point could move along on the section. */
   freeDirections: number;
+  /** Whether the quantity could be held: the family has a direction that changes it. */
+  isHeld: boolean;
 }
+
+/** A quantity whose change along the family is below this share of its steepness cannot be held. */
+const UNCHANGING = 1e-6;
 
 /**
  * Solve for the smallest change of the point that closes a chain of segments on itself.
  *
  *   (P + Q) ξ + c θ = r,   g·ξ = −u      (the end is the start, the start stays on the section)
  *
- * θ is eliminated by one reflection, so that it costs nothing; of all ξ that remain the shortest is taken.
+ * θ is eliminated by one reflection, so that it costs nothing; of all ξ that remain the shortest is taken, in a family
+ * of those that keep the held quantity, h·ξ = −(value).
  *
  * @param relation  what the chain says about its ends, see condenseSegments.
  * @param section   gradient and value of u at the first node.
  * @param cutOff    singular values at or below cutOff·σ_max count as zero.
+ * @param hold      the quantity to be held, if any; of no effect on an isolated orbit.
  *
  * Accuracy: that of the singular values; heuristic where they have no gap at the cut-off.
  * Cost: one singular value decomposition of n × n.
  * Source: least-norm Newton for under-determined systems (common practice); T free and the point held: our convention.
  */
-export function closingCorrection(relation: EndRelation, section: LinearSection, cutOff: number): ClosingCorrection {
+export function closingCorrection(
+  relation: EndRelation,
+  section: LinearSection,
+  cutOff: number,
+  hold: LinearHold | null = null,
+): ClosingCorrection {
   const n = relation.c.length;
   const width = n + 2;
   const work = new Float64Array((n + 1) * width);
@@ -55,8 +75,27 @@ export function closingCorrection(relation: EndRelation, section: LinearSection,
     for (let j = 0; j < n; j += 1) a[i * n + j] = work[(i + 1) * width + 1 + j]!;
     b[i] = work[(i + 1) * width + n + 1]!;
   }
-  const { x, rank } = leastNormSolve({ a, rows: n, cols: n, b, cutOff });
+  const { x, rank, open } = leastNormSolve({ a, rows: n, cols: n, b, cutOff });
+  const isHeld = hold !== null && moveAlong(x, open, hold);
   let rest = work[n + 1]!;
   for (let j = 0; j < n; j += 1) rest -= work[1 + j]! * x[j]!;
-  return { first: x, theta: rest / work[0]!, freeDirections: n - rank };
+  return { first: x, theta: rest / work[0]!, freeDirections: n - rank, isHeld };
+}
+
+/** Add to x the shortest change in the open directions with which h·x = −value; false where they hardly change h. */
+function moveAlong(x: Float64Array, open: Float64Array, { gradient, value }: LinearHold): boolean {
+  const n = x.length;
+  const width = open.length / n;
+  const slopes = new Float64Array(width);
+  let missing = -value;
+  for (let i = 0; i < n; i += 1) {
+    missing -= gradient[i]! * x[i]!;
+    for (let j = 0; j < width; j += 1) slopes[j]! += gradient[i]! * open[i * width + j]!;
+  }
+  const along = Math.hypot(...slopes);
+  if (!(along > UNCHANGING * Math.hypot(...gradient))) return false;
+  for (let i = 0; i < n; i += 1) {
+    for (let j = 0; j < width; j += 1) x[i]! += (open[i * width + j]! * slopes[j]! * missing) / along ** 2;
+  }
+  return true;
 }

@@ -6,6 +6,7 @@ import {
   type LinearSegment,
 } from '@/server/numerics/periodic/condense-segments';
 import { frobeniusNorm } from '@/server/numerics/periodic/frobenius-norm';
+import { NewtonLog, type NewtonStep } from '@/server/numerics/periodic/newton-log';
 import { periodDifferenceSize } from '@/server/numerics/periodic/period-difference-size';
 import { planSegments } from '@/server/numerics/periodic/plan-segments';
 import { planSingleShot } from '@/server/numerics/periodic/plan-single-shot';
@@ -34,23 +35,14 @@ const COARSEST_CUT_OFF = 1e-3;
 /** Newton steps, halvings included, before giving up; from a close start it takes two to five. */
 const MAX_ITERATIONS = 16;
 
-/** A correction of point and period below this leaves only rounding. */
-const SMALL_CORRECTION = 1e-10;
-
 /** Corrections of inner nodes above this still leave more than rounding: their squares. */
 const SMALL_INSIDE = 1e-6;
 
 /** Derivatives taken this near the orbit are those of the orbit. */
 const SAME_DERIVATIVES = 1e-13;
 
-/** A run of Newton steps that did not halve the smallest correction so far leads nowhere. */
-const PATIENCE = 6;
-
 /** Where every segment fits, a correction up to this many times what they miss by is made of rounding. */
 const ROUNDING_MAGNIFIED = 1e4;
-
-/** Newton must gain at least this factor in the last step before its corrections are small, or in that one. */
-const LEAST_GAIN = 10;
 
 /** No step moves a node by more than this share of the orbit, nor the period by more than this share of itself. */
 const LONGEST_STEP = 0.25;
@@ -66,6 +58,21 @@ const NOISE = 1e-8;
 const RESIDUAL_FLOOR = 1e-12;
 const RESIDUAL_ROUNDING = 100;
 
+/** A function of the state that a family's correction leaves at a value. */
+export interface HeldQuantity {
+  /** The value to be kept. */
+  target: number;
+  at(x: Float64Array): number;
+  /** Gradient at x, n entries. */
+  gradientAt(x: Float64Array): Float64Array;
+}
+
+/** Where segments begin, and how they are cut; the first node is the start. */
+export interface ShootingChain {
+  plan: ShootingPlan;
+  nodes: Float64Array[];
+}
+
 /** An orbit to be corrected. */
 export interface CorrectionInput {
   flow: Flow;
@@ -73,6 +80,10 @@ export interface CorrectionInput {
   period: number;
   /** Times at which the steps of a run over the period ended. */
   stepEnds: readonly number[];
+  /** Nodes that are known to lie along the orbit; without them the run from the start makes its own. */
+  chain?: ShootingChain | undefined;
+  /** Kept where the orbit belongs to a family; without it the point moves as little as it can. */
+  hold?: HeldQuantity | undefined;
   sizes: Float64Array;
   moduli: readonly (number | null)[];
   maxSteps: number;
@@ -97,6 +108,10 @@ export interface CorrectedOrbit {
   /** Below this a singular value of this orbit's relation counts as zero. */
   rankCutOff: number;
   freeDirections: number;
+  /** Whether the quantity that was to be held is. */
+  isHeld: boolean;
+  /** See NewtonLog. */
+  basinRatio: number | null;
   steps: number;
 }
 
@@ -114,8 +129,9 @@ export interface FailedCorrection {
 /**
  * Find the periodic orbit nearest to a point and a period by Newton's rule, in several segments where it is unstable.
  *
- * The first shot is one run over the period; it is cut where its derivative grows beyond 1e3, and from then on every
- * segment is shot from its own node. The point's change is the shortest there is, the period is free.
+ * The first shot is one run over the period, or one from each node that is given; it is cut where its derivative grows
+ * beyond 1e3, and from then on every segment is shot from its own node. The point's change is the shortest there is, the
+ * period is free.
  *
  * @returns the orbit, when the last corrections fell at least tenfold, the last is below 1e-10 and every segment misses
  *          the next node by at most 1e-12 + 100 ulp ‖Mᵢ‖ in sizes; else why not.
@@ -129,16 +145,6 @@ export function correctOrbit(input: CorrectionInput): CorrectedOrbit | FailedCor
   return new Corrector(input).run();
 }
 
-/** One Newton step. */
-interface Correction {
-  /** Change of point and period, in sizes. */
-  size: number;
-  /** Change of all nodes and the period, in sizes. */
-  inside: number;
-  /** Whether the step only follows rounding: every segment fitted before it. */
-  isRounding: boolean;
-}
-
 class Corrector {
   private plan: ShootingPlan;
   private nodes: Float64Array[];
@@ -147,7 +153,7 @@ class Corrector {
   private typed: ShotSegment[] = [];
   private relation: EndRelation | null = null;
   private divergenceIntegral = 0;
-  private readonly corrections: Correction[] = [];
+  private readonly log = new NewtonLog();
   private residual = Infinity;
   /** Where the last Newton step began, the closure there, and how much of the step was kept. */
   private lastStep: { nodes: Float64Array[]; period: number; residual: number; share: number } | null = null;
@@ -155,8 +161,8 @@ class Corrector {
   private steps = 0;
 
   constructor(private readonly input: CorrectionInput) {
-    this.plan = planSingleShot(input.stepEnds, input.period);
-    this.nodes = [input.start];
+    this.plan = input.chain?.plan ?? planSingleShot(input.stepEnds, input.period);
+    this.nodes = input.chain?.nodes ?? [input.start];
     this.period = input.period;
   }
 
@@ -169,14 +175,19 @@ class Corrector {
       if (this.wentTooFar()) continue;
       const correction = this.improve();
       if (!Number.isFinite(correction.inside) || this.period <= 0) return this.failed(null);
-      this.corrections.push(correction);
-      if (isSmall(correction) && correction.inside <= SMALL_INSIDE) {
+      this.log.add(correction);
+      if (this.log.isSettled() && correction.inside <= SMALL_INSIDE && !this.isOfOneRun(iteration)) {
         const ended = this.finish(correction.inside > SAME_DERIVATIVES);
         if (ended !== null) return ended;
       }
-      if (this.wandersOff()) return this.failed(null);
+      if (this.log.wandersOff()) return this.failed(null);
     }
     return this.failed(null);
+  }
+
+  /** Whether the segments are still those of one run over the period, whose rounding has grown with it. */
+  private isOfOneRun(iteration: number): boolean {
+    return iteration === 1 && this.plan.length > (this.input.chain?.plan.length ?? 1);
   }
 
   private shot(variations: boolean, watch?: SectionWatch): Shot | FlowFailure {
@@ -189,7 +200,7 @@ class Corrector {
 
   private take(shot: Shot, isFirst: boolean): void {
     if (isFirst) {
-      const cut = planSegments(shot, this.input.sizes);
+      const cut = planSegments(shot, this.nodes, this.input);
       this.plan = cut.plan;
       this.nodes = cut.nodes;
       this.segments = cut.segments;
@@ -228,14 +239,17 @@ class Corrector {
   }
 
   private closing(): ClosingCorrection {
-    const { flow, sizes } = this.input;
+    const { flow, sizes, hold } = this.input;
     const first = this.nodes[0]!;
-    const gradient = flow.sectionGradient(first).map((entry, i) => entry * sizes[i]!);
-    return closingCorrection(this.relation!, { gradient, value: flow.section(first) }, this.rankCutOff());
+    const scaled = (gradient: Float64Array): Float64Array => gradient.map((entry, i) => entry * sizes[i]!);
+    const section = { gradient: scaled(flow.sectionGradient(first)), value: flow.section(first) };
+    const held =
+      hold === undefined ? null : { gradient: scaled(hold.gradientAt(first)), value: hold.at(first) - hold.target };
+    return closingCorrection(this.relation!, section, this.rankCutOff(), held);
   }
 
   /** Take one Newton step. */
-  private improve(): Correction {
+  private improve(): NewtonStep {
     const defects = this.defects();
     const { residual, lastStep } = this;
     const fits = this.fits(defects);
@@ -279,17 +293,23 @@ class Corrector {
     if (renew) this.divergenceIntegral = shot.divergenceIntegral;
     const defects = this.defects();
     if (!this.fits(defects)) return null;
-    if (!this.fellFast() || this.standsStill(watch)) return this.failed(null);
+    if (!this.log.fellFast() || this.standsStill(watch)) return this.failed(null);
     if (renew) this.condense(defects);
     const { nodes, plan, period, segments, typed, divergenceIntegral, residual, steps } = this;
     const relation = this.relation!;
     return {
       converged: true,
       ...{ nodes, plan, period, segments, typed, relation, divergenceIntegral, watch, residual, steps },
-      iterations: this.corrections.length,
+      iterations: this.log.length,
+      basinRatio: this.log.basinRatio(),
       rankCutOff: this.rankCutOff(),
-      freeDirections: this.closing().freeDirections,
+      ...this.family(),
     };
+  }
+
+  private family(): Pick<CorrectedOrbit, 'freeDirections' | 'isHeld'> {
+    const { freeDirections, isHeld } = this.closing();
+    return { freeDirections, isHeld };
   }
 
   /** Whether every segment meets the next node as nearly as its growth lets it. */
@@ -306,31 +326,10 @@ class Corrector {
     return this.input.sizes.every((size, i) => highest[i]! - lowest[i]! < STANDING * size);
   }
 
-  /** Whether the corrections stopped getting smaller long ago. */
-  private wandersOff(): boolean {
-    const sizes = this.corrections.map(({ inside }) => inside);
-    const earlier = sizes.slice(0, -PATIENCE);
-    return earlier.length > 0 && Math.min(...sizes.slice(-PATIENCE)) > Math.min(...earlier) / 2;
-  }
-
-  /** Whether the last correction that was not small, or the one after it, fell at least tenfold or to rounding. */
-  private fellFast(): boolean {
-    const last = this.corrections.findLastIndex((correction) => !isSmall(correction));
-    if (last === -1) return true;
-    const { size } = this.corrections[last]!;
-    const into = this.corrections[last + 1];
-    if (into !== undefined && (into.isRounding || into.size * LEAST_GAIN <= size)) return true;
-    return last > 0 && size * LEAST_GAIN <= this.corrections[last - 1]!.size;
-  }
-
   private failed(failure: FlowFailure | null): FailedCorrection {
     const { residual, typed, steps } = this;
-    return { converged: false, failure, iterations: this.corrections.length, residual, typed, steps };
+    return { converged: false, failure, iterations: this.log.length, residual, typed, steps };
   }
-}
-
-function isSmall({ size, isRounding }: Correction): boolean {
-  return size <= SMALL_CORRECTION || isRounding;
 }
 
 function largestEntry(x: Float64Array): number {

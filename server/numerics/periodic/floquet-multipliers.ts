@@ -10,6 +10,12 @@ const MAX_SWEEPS = 60;
 /** Two invariant subspaces count as separated when one leaks less than this into the other. */
 const SEPARATED = 1e-13;
 
+/** A leak that no further sweep makes smaller. */
+const ROUNDING = 4 * Number.EPSILON;
+
+/** Sweeps over which it is judged how fast a leak closes. */
+const WINDOW = 8;
+
 /** A multiplier with the logarithm of its modulus, which neither overflows nor vanishes. */
 export interface Multiplier {
   /** λ = exp(logModulus)·(re + i im), re² + im² = 1. */
@@ -27,7 +33,6 @@ export interface Multiplier {
  *
  * @param pieces  N ≥ 1 matrices n × n, row-major, in order of time, in sizes; each well conditioned (below about 1e8).
  * @param n       dimension.
- * @param coarse  the same product in fewer factors, which may be badly conditioned: a start for the sweeps, nothing else.
  * @returns       n multipliers, largest modulus first, conjugates adjacent with positive imaginary part first; null when
  *                the eigenvalues of a block cannot be found or an entry is not finite.
  *
@@ -36,31 +41,34 @@ export interface Multiplier {
  * Source: QR sweeps as for Lyapunov exponents (common practice); blocks as in the periodic Schur form of A. W. Bojanczyk,
  *         G. H. Golub, P. Van Dooren, SPIE 1770 (1992) 31–42 (from memory), which this does not compute.
  */
-export function floquetMultipliers(
-  pieces: readonly Float64Array[],
-  n: number,
-  coarse: readonly Float64Array[] = pieces,
-): Multiplier[] | null {
+export function floquetMultipliers(pieces: readonly Float64Array[], n: number): Multiplier[] | null {
   if (n === 0) return [];
-  const start =
-    coarse === pieces ? startingBasis(n) : (sweepUntilSeparated(coarse, startingBasis(n), n)?.basis ?? null);
-  const last = start === null ? null : sweepUntilSeparated(pieces, start, n);
+  const last = sweepUntilSeparated(pieces, startingBasis(n), n);
   const found = last === null ? null : multipliersOf(last, n);
   return found === null ? null : found.sort((a, b) => b.logModulus - a.logModulus);
 }
 
-/** Sweep until all multipliers are separated as far as rounding lets them, or the sweeps are used up. */
+/** Sweep until all multipliers are separated that rounding lets, or that the sweeps left can still separate. */
 function sweepUntilSeparated(pieces: readonly Float64Array[], start: Float64Array, n: number): Sweep | null {
   let best: Sweep | null = null;
-  let before = Infinity;
-  for (let sweep = 0; sweep < MAX_SWEEPS; sweep += 1) {
+  const history: number[][] = [];
+  while (history.length < MAX_SWEEPS) {
     best = sweepOnce(pieces, best?.basis ?? start, n);
     if (best === null) return null;
-    const leak = Math.max(0, ...leaksOf(best.b, n));
-    if (leak <= SEPARATED && leak > before / 2) break;
-    before = leak;
+    history.push(leaksOf(best.b, n));
+    if (history.at(-1)!.every((_, cut) => isDone(history, cut))) break;
   }
   return best;
+}
+
+/** Whether a cut leaks no more than rounding, or leaks so steadily that it will not be closed. */
+function isDone(history: readonly number[][], cut: number): boolean {
+  const leak = history.at(-1)![cut]!;
+  const before = history.at(-2)?.[cut] ?? Infinity;
+  if (leak <= ROUNDING || (leak <= SEPARATED && leak > before / 2)) return true;
+  const earlier = history.at(-1 - WINDOW)?.[cut];
+  if (earlier === undefined) return false;
+  return leak * (leak / earlier) ** ((MAX_SWEEPS - history.length) / WINDOW) > SEPARATED;
 }
 
 interface Sweep {
@@ -81,16 +89,18 @@ function sweepOnce(pieces: readonly Float64Array[], start: Float64Array, n: numb
   const triangles: Float64Array[] = [];
   for (const piece of pieces) {
     const z = multiplyMatrices(piece, basis, n, n);
-    if (!z.every(Number.isFinite)) return null;
     const r = new Float64Array(n * n);
     orthonormalise(z, r, n);
     triangles.push(r);
     basis = z;
   }
+  // What is not finite in one piece is so in the last basis.
+  for (const entry of basis) if (!Number.isFinite(entry)) return null;
   const b = new Float64Array(n * n);
-  for (let i = 0; i < n; i += 1) {
-    for (let j = 0; j < n; j += 1) {
-      for (let k = 0; k < n; k += 1) b[i * n + j]! += start[k * n + i]! * basis[k * n + j]!;
+  for (let k = 0; k < n; k += 1) {
+    for (let i = 0; i < n; i += 1) {
+      const factor = start[k * n + i]!;
+      for (let j = 0; j < n; j += 1) b[i * n + j]! += factor * basis[k * n + j]!;
     }
   }
   return { basis, b, triangles };

@@ -6,5 +6,9 @@
  */
 export function scaleMatrix(m: Float64Array, sizes: Float64Array): Float64Array {
   const n = sizes.length;
-  return m.map((entry, k) => (entry * sizes[k % n]!) / sizes[Math.floor(k / n)]!);
+  const scaled = new Float64Array(n * n);
+  for (let i = 0; i < n; i += 1) {
+    for (let j = 0; j < n; j += 1) scaled[i * n + j] = (m[i * n + j]! * sizes[j]!) / sizes[i]!;
+  }
+  return scaled;
 }

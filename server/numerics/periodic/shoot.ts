@@ -6,6 +6,9 @@ import { type Flow, type FlowResult, type TaylorStep } from '@/server/numerics/t
 /** A piece whose volume shrinks or grows by more than exp of this is halved: its derivative would drown in rounding. */
 const MAX_VOLUME_LOG = 9;
 
+/** A piece in which some direction grows beyond this is halved as well, before it drowns all others. */
+const MAX_GROWTH = 1e4;
+
 /** How often a piece may be halved. */
 const MAX_HALVINGS = 8;
 
@@ -38,6 +41,8 @@ export interface ShotSegment {
   pieces: Float64Array[];
   /** Product of the pieces; null without variations. */
   monodromy: Float64Array | null;
+  /** End of the run that the derivative belongs to, from starts[0]; `end` itself unless it was computed again. */
+  derivedEnd: Float64Array;
 }
 
 /** All segments as integrated. */
@@ -61,12 +66,16 @@ export function shoot(options: ShootOptions): Shot | FlowFailure {
   for (const [index, planned] of options.plan.entries()) {
     const node = options.nodes[index]!;
     const borders = options.variations ? planned.borders : [planned.borders[0]!, planned.borders.at(-1)!];
-    const segment: ShotSegment = { end: node, borders: [borders[0]!], starts: [], pieces: [], monodromy: null };
+    const segment: ShotSegment = {
+      ...{ end: node, borders: [borders[0]!], starts: [], pieces: [] },
+      ...{ monodromy: null, derivedEnd: node },
+    };
     for (let k = 0; k + 1 < borders.length; k += 1) {
       const failure = run.piece(segment, { from: borders[k]!, to: borders[k + 1]! }, 0);
       if (failure !== null) return failure;
     }
     if (options.variations) segment.monodromy = product(segment.pieces, options.flow.dimension);
+    segment.derivedEnd = segment.end;
     segments.push(segment);
   }
   return { ok: true, segments, divergenceIntegral: run.divergenceIntegral, steps: run.steps };
@@ -97,10 +106,14 @@ class Run {
       ...(shouldStop === undefined ? {} : { shouldStop }),
     });
     this.steps += result.steps;
+    const mayHalve = variations && watch === undefined && depth < MAX_HALVINGS;
+    // A derivative beyond the range of doubles looks like a singularity; a shorter piece tells.
+    if (!result.ok && mayHalve && result.reason === 'singularity') return this.halves(segment, share, depth);
     if (!result.ok) return { ...result, t: begin + result.t };
     const { monodromy } = result;
-    if (monodromy !== null && watch === undefined && depth < MAX_HALVINGS) {
-      if (Math.abs(result.divergenceIntegral) > MAX_VOLUME_LOG) return this.halves(segment, share, depth);
+    if (monodromy !== null && mayHalve) {
+      const isLong = Math.abs(result.divergenceIntegral) > MAX_VOLUME_LOG || !(growthOf(monodromy) <= MAX_GROWTH);
+      if (isLong) return this.halves(segment, share, depth);
     }
     this.divergenceIntegral += result.divergenceIntegral;
     segment.starts.push(start);
@@ -114,4 +127,17 @@ class Run {
     const middle = (from + to) / 2;
     return this.piece(segment, { from, to: middle }, depth + 1) ?? this.piece(segment, { from: middle, to }, depth + 1);
   }
+}
+
+/** √ of the largest |mᵢⱼ mⱼᵢ|: a size of growth that no choice of units changes. */
+function growthOf(m: Float64Array): number {
+  const n = Math.sqrt(m.length);
+  let largest = 0;
+  for (let i = 0; i < n; i += 1) {
+    for (let j = i; j < n; j += 1) {
+      const product = Math.abs(m[i * n + j]! * m[j * n + i]!);
+      if (!(product <= largest)) largest = product;
+    }
+  }
+  return Math.sqrt(largest);
 }

@@ -15,7 +15,7 @@ export function transversality(flow: Flow, x: Float64Array, sizes: Float64Array)
   const gradient = flow.sectionGradient(x);
   let speed = 0;
   for (let i = 0; i < sizes.length; i += 1) speed += gradient[i]! * field[i]!;
-  const product = transversalScale(flow, x, sizes);
+  const product = headOn(field, gradient, sizes);
   return product === 0 ? 0 : Math.max(-1, Math.min(1, speed / product));
 }
 
@@ -25,9 +25,15 @@ export function transversality(flow: Flow, x: Float64Array, sizes: Float64Array)
  * @returns 0 where the gradient or the field vanishes.
  */
 export function transversalScale(flow: Flow, x: Float64Array, sizes: Float64Array): number {
-  const field = flow.field(x);
-  const gradient = flow.sectionGradient(x);
-  const steepness = Math.hypot(...gradient.map((entry, i) => entry * sizes[i]!));
-  const motion = Math.hypot(...field.map((entry, i) => entry / sizes[i]!));
-  return steepness * motion;
+  return headOn(flow.field(x), flow.sectionGradient(x), sizes);
+}
+
+function headOn(field: Float64Array, gradient: Float64Array, sizes: Float64Array): number {
+  let steepness = 0;
+  let motion = 0;
+  for (let i = 0; i < sizes.length; i += 1) {
+    steepness += (gradient[i]! * sizes[i]!) ** 2;
+    motion += (field[i]! / sizes[i]!) ** 2;
+  }
+  return Math.sqrt(steepness) * Math.sqrt(motion);
 }

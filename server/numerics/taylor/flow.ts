@@ -1,6 +1,7 @@
 import { staticValues } from '@/server/numerics/expression/static-values';
 import type { FlowDefinition } from '@/server/numerics/taylor/flow-definition';
 import { type FlowResult, type IntegrateOptions, integrate } from '@/server/numerics/taylor/integrate';
+import type { JetKernel } from '@/server/numerics/taylor/jet-kernel';
 import { type PreparedFlow, preparedFlow } from '@/server/numerics/taylor/prepared-flow';
 
 export type { FlowDefinition } from '@/server/numerics/taylor/flow-definition';
@@ -31,6 +32,9 @@ export interface Flow {
 export function createFlow(definition: FlowDefinition): Flow {
   return new TaylorFlow(definition, preparedFlow(definition));
 }
+
+/** Where each kernel was evaluated last, and for whom: field, section and gradients are mostly asked for at one point. */
+const lastPoints = new WeakMap<JetKernel, { flow: Flow; x: Float64Array }>();
 
 class TaylorFlow implements Flow {
   readonly dimension: number;
@@ -93,6 +97,9 @@ class TaylorFlow implements Flow {
     if (x.length !== this.dimension) {
       throw new RangeError(`the point has ${x.length} coordinates, not ${this.dimension}`);
     }
+    const last = lastPoints.get(kernel);
+    if (last?.flow === this && last.x.every((value, i) => value === x[i])) return;
+    lastPoints.set(kernel, { flow: this, x: Float64Array.from(x) });
     kernel.memory.set(this.pointStatics, 0);
     for (let i = 0; i < this.dimension; i++) {
       kernel.memory[kernel.seriesStart + i] = x[i]!;

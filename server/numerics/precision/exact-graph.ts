@@ -1,0 +1,43 @@
+import { type BinaryOperation, Graph, type Unary } from '@/server/numerics/expression/graph';
+import { rational, type Rational, rationalOfDouble } from '@/server/numerics/precision/rational';
+
+/** Powers up to this are looked at whether they are exact. */
+const LARGEST_POWER = 64;
+
+/**
+ * A graph whose constants are exact: an operation on constants is folded only where its double is the very result.
+ * What is left stands as a static value, to be computed with as many bits as are wanted.
+ */
+export class ExactGraph extends Graph {
+  protected override fold(operation: BinaryOperation, x: number, y: number): number | null {
+    const value = super.fold(operation, x, y);
+    if (value === null || !Number.isFinite(value)) return null;
+    const exact = exactResult(operation, x, y);
+    const { p, q } = rationalOfDouble(value);
+    return exact !== null && exact.p === p && exact.q === q ? value : null;
+  }
+
+  protected override foldUnary(operation: Unary, x: number): number | null {
+    const value = super.foldUnary(operation, x);
+    return operation === 'sqrt' && value !== null && this.fold('multiply', value, value) === x ? value : null;
+  }
+}
+
+function exactResult(operation: BinaryOperation, x: number, y: number): Rational | null {
+  const [a, b] = [rationalOfDouble(x), rationalOfDouble(y)];
+  switch (operation) {
+    case 'add':
+      return rational(a.p * b.q + b.p * a.q, a.q * b.q);
+    case 'subtract':
+      return rational(a.p * b.q - b.p * a.q, a.q * b.q);
+    case 'multiply':
+      return rational(a.p * b.p, a.q * b.q);
+    case 'divide':
+      return b.p === 0n ? null : rational(a.p * b.q, a.q * b.p);
+    case 'power': {
+      if (!Number.isInteger(y) || Math.abs(y) > LARGEST_POWER || (y < 0 && x === 0)) return null;
+      const size = BigInt(Math.abs(y));
+      return y < 0 ? rational(a.q ** size, a.p ** size) : rational(a.p ** size, a.q ** size);
+    }
+  }
+}
