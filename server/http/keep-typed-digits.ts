@@ -1,7 +1,16 @@
 import { scanJson, type JsonNumber } from '@/server/http/scan-json';
 
 /** Members of a submission's body whose numbers are decimal texts to us. */
-const TYPED_MEMBERS = new Set(['point', 'period', 'returnTimes', 'tolerance', 'parameters', 'multipliers', 'section']);
+const TYPED_MEMBERS = new Set([
+  'point',
+  'points',
+  'period',
+  'returnTimes',
+  'tolerance',
+  'parameters',
+  'multipliers',
+  'section',
+]);
 
 /**
  * Put quotes around the JSON numbers that JSON.parse would not give back digit by digit.

@@ -24,6 +24,16 @@ export const accountOperations: readonly Operation[] = [
     problems: [...BODY, 'wrong-credentials', 'not-confirmed', 'password-too-long', 'too-many-sign-ins', 'cross-site'],
   },
   {
+    id: 'changeSession',
+    method: 'patch',
+    path: '/session',
+    summary: 'Turn the daily mail about new submissions on or off',
+    role: 'curator',
+    body: 'session-change',
+    answers: [{ status: 200, description: 'Who am I, as it is now.', schema: 'session' }],
+    problems: [...BODY, 'not-signed-in', 'session-expired', 'not-allowed', 'cross-site'],
+  },
+  {
     id: 'signOut',
     method: 'delete',
     path: '/session',

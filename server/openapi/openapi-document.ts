@@ -42,7 +42,9 @@ function describe(operation: Operation): Json {
     operationId: operation.id,
     summary: operation.summary,
     ...(operation.description ? { description: operation.description } : {}),
-    ...(operation.role ? { security: [{ signIn: [] }], 'x-role': operation.role } : {}),
+    // Whoever is signed in may do more; only some calls ask for it.
+    security: operation.role ? [{ signIn: [] }] : [{}, { signIn: [] }],
+    ...(operation.role ? { 'x-role': operation.role } : {}),
     ...(operation.parameters?.length ? { parameters: operation.parameters.map(parameter) } : {}),
     ...(operation.body ? { requestBody: { required: true, content: json(reference(operation.body)) } } : {}),
     responses: { ...answers(operation.answers), ...problems(operation.problems) },

@@ -1,5 +1,5 @@
 import { entryForms } from '@/server/presenters/entry-forms';
-import { ifNoneMatch, type Operation, pageParameters, pathParameter } from '@/server/openapi/operation';
+import { ifNoneMatch, type Operation, pageParameters, pathParameter, queryParameter } from '@/server/openapi/operation';
 import { exportParameters, searchParameters } from '@/server/openapi/search-parameters';
 
 const ACCESSION = pathParameter('accession', 'Accession such as RTN-00000175.');
@@ -64,6 +64,16 @@ export const orbitOperations: readonly Operation[] = [
     problems: SLOW,
   },
   {
+    id: 'describeExport',
+    method: 'get',
+    path: '/orbits.datapackage.json',
+    summary: "What an export's files and columns are",
+    description: 'A Frictionless Data Package descriptor whose resources are the exports of the same search.',
+    parameters: exportParameters,
+    answers: [{ status: 200, description: 'The descriptor.', media: ['application/json'] }],
+    problems: SLOW,
+  },
+  {
     id: 'readOrbit',
     method: 'get',
     path: '/orbits/:accession',
@@ -71,7 +81,11 @@ export const orbitOperations: readonly Operation[] = [
     description:
       'JSON; by Accept or a suffix CSV (.csv), BibTeX (.bib), CSL-JSON (.csl.json), RIS (.ris) and a sentence to cite ' +
       '(.txt). A browser that asks for HTML is sent on to the page with 303.',
-    parameters: [ACCESSION, ifNoneMatch],
+    parameters: [
+      ACCESSION,
+      queryParameter('revision', 'One of its revisions; the current one unless given.', { type: 'integer', minimum: 1 }),
+      ifNoneMatch,
+    ],
     answers: [
       {
         status: 200,
@@ -80,7 +94,7 @@ export const orbitOperations: readonly Operation[] = [
         media: entryForms.map(({ media }) => media),
       },
     ],
-    problems: [...UNKNOWN, 'not-acceptable'],
+    problems: [...UNKNOWN, 'not-found', 'invalid-query', 'not-acceptable'],
   },
   {
     id: 'traceOrbit',
@@ -106,6 +120,15 @@ export const orbitOperations: readonly Operation[] = [
     summary: 'What changed in an entry, and when',
     parameters: [ACCESSION],
     answers: [{ status: 200, description: 'Revisions, the newest first.', itemsOf: 'entry-revision' }],
+    problems: UNKNOWN,
+  },
+  {
+    id: 'listImages',
+    method: 'get',
+    path: '/orbits/:accession/images',
+    summary: 'Entries that are the image of one under a symmetry of its system',
+    parameters: [ACCESSION],
+    answers: [{ status: 200, description: 'Images in the catalogue.', itemsOf: 'entry-image' }],
     problems: UNKNOWN,
   },
 ];

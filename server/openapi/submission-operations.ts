@@ -38,10 +38,12 @@ export const submissionOperations: readonly Operation[] = [
     id: 'listSubmissions',
     method: 'get',
     path: '/submissions',
-    summary: 'Mine; with queue=review those to review',
+    summary: 'Mine; with queue=review those to review, with queue=returned those that a curator sent back',
     role: 'reader',
     parameters: [
-      queryParameter('queue', 'review: the queue of the curators.', { enum: ['review'] }),
+      queryParameter('queue', 'For curators. review: the queue; returned: what waits for its contributor.', {
+        enum: ['review', 'returned'],
+      }),
       ...pageParameters,
     ],
     answers: [{ status: 200, description: 'A page of submissions.', schema: 'submission-page' }],

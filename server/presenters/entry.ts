@@ -28,7 +28,13 @@ export const presentEntry = ({ content, ...row }: EntryRow): Entry => ({
   correction: content.correction,
   verdict: content.verdict,
   findings: content.findings,
-  evidence: { level: row.evidence, digits: row.digits, engine: content.engine },
+  evidence: {
+    level: row.evidence,
+    digits: row.digits,
+    engine: content.engine,
+    held: content.refinement?.held ?? null,
+    obstacle: row.obstacle,
+  },
   submitted: content.submitted,
   contributor: { name: row.contributor_name, orcid: row.contributor_orcid },
   curator: { name: row.curator_name, orcid: row.curator_orcid },
@@ -40,12 +46,16 @@ export const presentEntry = ({ content, ...row }: EntryRow): Entry => ({
   withdrawal: withdrawalOf(row),
   caution: CAUTION,
   links: {
-    self: `/api/v1/orbits/${row.accession}`,
+    self: entryAddress(row),
     page: `/orbits/${row.accession}`,
     trace: `/api/v1/orbits/${row.accession}/trace`,
     system: `/api/v1/systems/${row.slug}`,
   },
 });
+
+/** Where a revision stands: the current one without its number. */
+const entryAddress = ({ accession, revision, current_revision }: Omit<EntryRow, 'content'>): string =>
+  `/api/v1/orbits/${accession}${revision === current_revision ? '' : `?revision=${revision}`}`;
 
 const withdrawalOf = ({
   withdrawn_at,

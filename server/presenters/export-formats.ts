@@ -10,7 +10,7 @@ export type ExportFormat = 'json' | 'ndjson' | 'csv';
 interface Format {
   type: string;
   /** The export piece by piece; no piece is larger than an entry. */
-  pieces(found: OrbitExport): AsyncGenerator<string>;
+  pieces: (found: OrbitExport) => AsyncGenerator<string>;
 }
 
 export const exportFormats: Readonly<Record<ExportFormat, Format>> = {

@@ -10,12 +10,13 @@ interface PageParts {
 
 /** One page of a search as the API shows it. */
 export const presentOrbitPage = (
-  { rows, total }: FoundPage,
+  { rows, total, upToSymmetry }: FoundPage,
   { next, withIncipits, withDistances }: PageParts,
 ): OrbitPage => ({
   items: rows.map(presentEntry),
   next,
   total,
+  upToSymmetry,
   incipits: withIncipits ? Object.fromEntries(rows.map(({ accession, incipit }) => [accession, incipit])) : null,
   distances: withDistances
     ? Object.fromEntries(rows.flatMap(({ accession, distance }) => (distance === null ? [] : [[accession, distance]])))

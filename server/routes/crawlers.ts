@@ -33,7 +33,7 @@ export function crawlerRoutes({ pool, config: { publicUrl } }: AppDependencies):
 
   router.get('/sitemap-pages.xml', async (_req, res) => {
     const systems = await systemsOfSitemap(pool);
-    const paths = ['/', '/systems', ...systems.map((slug) => `/systems/${slug}`)];
+    const paths = ['/', '/systems', '/releases', ...systems.map((slug) => `/systems/${slug}`)];
     const items = paths.map((path) => element('url', { loc: publicUrl + path }));
     res.set('Cache-Control', HOUR).type('application/xml').send(mapOf('urlset', items));
   });

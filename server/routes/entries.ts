@@ -3,6 +3,7 @@ import type { AppDependencies } from '@/server/app-dependencies';
 import { Problem } from '@/server/errors';
 import { answerWithEtag, strongEtag } from '@/server/http/conditional';
 import { readPoints } from '@/server/http/read-points';
+import { readRevision } from '@/server/http/read-revision';
 import { presentEntry } from '@/server/presenters/entry';
 import { entryFileLinks } from '@/server/presenters/head/entry-head';
 import { linkHeader } from '@/server/presenters/head/page-head';
@@ -10,6 +11,7 @@ import { entryForms } from '@/server/presenters/entry-forms';
 import { type EntryRow } from '@/server/services/entry-rows';
 import { findEntry } from '@/server/services/find-entry';
 import { findTraceRequest } from '@/server/services/find-trace-request';
+import { listImages } from '@/server/services/list-images';
 import { listRevisions } from '@/server/services/list-revisions';
 
 const JSON_FORM = 'application/json';
@@ -22,7 +24,7 @@ export function entryRoutes({ pool, tracer, config }: AppDependencies): Router {
 
   router.get('/orbits/:accession', async (req, res) => {
     const [typed, suffix] = splitSuffix(req.params['accession']);
-    const entry = await findEntry(pool, typed);
+    const entry = await findEntry(pool, typed, readRevision(req.query));
     sendEntry(req, res, { entry, form: suffix ?? acceptedForm(req), publicUrl: config.publicUrl });
   });
 
@@ -36,7 +38,12 @@ export function entryRoutes({ pool, tracer, config }: AppDependencies): Router {
 
   router.get('/orbits/:accession/revisions', async (req, res) => {
     const entry = await findEntry(pool, req.params['accession']);
-    res.set('Cache-Control', 'no-cache').json({ items: await listRevisions(pool, entry.number) });
+    res.set('Cache-Control', 'no-cache').json({ items: await listRevisions(pool, entry) });
+  });
+
+  router.get('/orbits/:accession/images', async (req, res) => {
+    const entry = await findEntry(pool, req.params['accession']);
+    res.set('Cache-Control', 'no-cache').json({ items: await listImages(pool, entry.number) });
   });
 
   return router;

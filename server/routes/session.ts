@@ -1,13 +1,16 @@
 import { type Request, type Response, Router } from 'express';
-import type { Session, SignIn as SignInBody } from '@/schemas/generated/contract';
+import type { Session, SessionChange, SignIn as SignInBody } from '@/schemas/generated/contract';
 import type { AppDependencies } from '@/server/app-dependencies';
 import { userOf } from '@/server/http/current-user';
 import { addressOf, type RateLimits } from '@/server/http/rate-limits';
+import { requireRole, signedInUser } from '@/server/http/require-role';
 import { SESSION_COOKIE } from '@/server/http/session-cookie';
 import type { SignIn } from '@/server/http/sign-in-strategy';
 import { bodyOf, validBody } from '@/server/http/valid-body';
+import { User } from '@/server/models/user';
 import { presentUser } from '@/server/presenters/user';
 import { countWaiting } from '@/server/services/count-waiting';
+import { isCurator } from '@/server/services/find-submission';
 
 interface SessionParts {
   signIn: SignIn;
@@ -23,6 +26,7 @@ export function sessionRoutes({ config, db }: AppDependencies, { signIn, limits 
     return {
       user: user && presentUser(user),
       waiting: user ? await countWaiting(db, user) : 0,
+      digest: user && isCurator(user) ? user.digest : null,
       development: !config.production && config.smtpUrl === null,
     };
   };
@@ -35,6 +39,13 @@ export function sessionRoutes({ config, db }: AppDependencies, { signIn, limits 
     const account = bodyOf<SignInBody>(req).email.trim().toLowerCase();
     await limits.signIn({ address: addressOf(req), account }, () => begin(signIn, req, res));
     res.set('Cache-Control', 'no-store').json(await session(req));
+  });
+
+  router.patch('/session', requireRole('curator'), validBody('session-change'), async (req, res) => {
+    const { id } = signedInUser(req);
+    const { digest } = bodyOf<SessionChange>(req);
+    await User.update({ digest }, { where: { id } });
+    res.set('Cache-Control', 'no-store').json({ ...(await session(req)), digest });
   });
 
   router.delete('/session', async (req, res) => {

@@ -50,7 +50,7 @@ function submissionReading({ db }: AppDependencies): Router {
     const person = signedInUser(req);
     const { limit, after } = readPage(req.query, ['queue']);
     const queue = readQueue(req.query['queue']);
-    if (queue === 'review' && !hasRole(person, 'curator')) throw notAllowed('curator');
+    if (queue !== 'mine' && !hasRole(person, 'curator')) throw notAllowed('curator');
     const cursor = ['submissions', queue];
     const place = after === null ? null : (decodeCursor(cursor, after, 2) as SubmissionPlace);
     const { items, last, total, turns } = await listSubmissions(db, person, { queue, limit, after: place });
@@ -158,6 +158,8 @@ function submissionReview({ config, db, tracer }: AppDependencies): Router {
 
 function readQueue(given: unknown): SubmissionQueue {
   if (given === undefined || given === '') return 'mine';
-  if (given === 'review') return 'review';
-  throw invalidQuery([{ pointer: '#queue', message: 'queue is "review", or left out for your own submissions.' }]);
+  if (given === 'review' || given === 'returned') return given;
+  throw invalidQuery([
+    { pointer: '#queue', message: 'queue is "review" or "returned", or left out for your own submissions.' },
+  ]);
 }

@@ -14,7 +14,8 @@ export type Requester = { accountId: string } | { addressHash: string };
 const RETRY_SECONDS = 2;
 
 /**
- * Refuse a check to somebody who has too many under way or has used up the computing time.
+ * Refuse a computation to somebody who has too many under way or has used up the computing time; checks and
+ * refinements count alike.
  *
  * Requests of one requester wait for each other here until their transactions end, so that none slips past the count.
  *
@@ -31,14 +32,15 @@ export async function allowCheck(db: Sequelize, requester: Requester, transactio
     `select count(*) filter (where finished_at is null and submission_id is null)::integer as waiting,
        coalesce(sum(compute_ms), 0) >= $3 * 1000 as used,
        extract(epoch from min(finished_at) filter (where compute_ms > 0) - now())::float8 as oldest
-     from orbit_check where ${column} = $1
-       and (finished_at is null or finished_at > now() - make_interval(secs => $2))`,
+     from (select submission_id, finished_at, compute_ms from orbit_check where ${column} = $1
+       ${isAccount ? 'union all select null, finished_at, compute_ms from refinement where asked_by = $1' : ''}) as asked
+     where finished_at is null or finished_at > now() - make_interval(secs => $2)`,
     { bind: [who, computing.windowSeconds, computing.seconds], type: QueryTypes.SELECT, transaction },
   );
   if (used!.waiting >= atOnce) {
     throw tooMany(
       'too-many-checks',
-      `${used!.waiting} of your checks wait or run; the limit is ${atOnce} at once${isAccount ? '' : ' without an account'}.`,
+      `${used!.waiting} of your checks${isAccount ? ' and refinements' : ''} wait or run; the limit is ${atOnce} at once${isAccount ? '' : ' without an account'}.`,
       RETRY_SECONDS,
     );
   }
@@ -46,7 +48,7 @@ export async function allowCheck(db: Sequelize, requester: Requester, transactio
     const { seconds, windowSeconds } = computing;
     throw tooMany(
       'computing-time-used',
-      `Your checks have computed for ${seconds} s within ${windowSeconds} s, which is the limit${isAccount ? '' : ' without an account'}.`,
+      `Your checks${isAccount ? ' and refinements' : ''} have computed for ${seconds} s within ${windowSeconds} s, which is the limit${isAccount ? '' : ' without an account'}.`,
       windowSeconds + (used!.oldest ?? 0),
     );
   }

@@ -15,11 +15,15 @@ import {
   type ClosedReport,
   crossingPlace,
   entryContent,
+  evidenceOf,
   largestModulus,
   orbitExtents,
 } from '@/server/services/entry-figures';
 import type { KnownSystem } from '@/server/services/known-system';
 import { numberOf, parametersOf } from '@/server/services/parameters-of';
+import { queueRefinement } from '@/server/services/queue-refinement';
+import { recordImages } from '@/server/services/record-images';
+import { DIGITS_OF_EVERY_ENTRY } from '@/server/services/refinement-limits';
 
 /** Everything an entry is made of. */
 export interface EntryParts {
@@ -35,7 +39,7 @@ export interface EntryParts {
 }
 
 /**
- * Write an entry: its row, first revision, references and crossings.
+ * Write an entry: its row, first revision, references and crossings, and queue its refinement.
  *
  * @returns its number.
  */
@@ -48,8 +52,11 @@ export async function createEntry(db: Sequelize, parts: EntryParts, transaction:
   const { number } = next!;
   await createRow(number, parts, transaction);
   const content = entryContent(report, body);
-  const revision = { orbitNumber: number, revision: 1, content, checkId, madeBy: curatorId };
-  await OrbitRevision.create({ ...revision, why: `Accepted as submission ${submission.number}.` }, { transaction });
+  const why = `Accepted as submission ${submission.number}.`;
+  await OrbitRevision.create(
+    { orbitNumber: number, revision: 1, content, checkId, madeBy: curatorId, why, ...evidenceOf(report) },
+    { transaction },
+  );
   await Reference.bulkCreate(
     (body.references ?? []).map(({ citation, doi }, index) => ({
       ...{ orbitNumber: number, revision: 1, position: index + 1 },
@@ -58,6 +65,10 @@ export async function createEntry(db: Sequelize, parts: EntryParts, transaction:
     { transaction },
   );
   await createCrossings(number, parts, transaction);
+  await recordImages(db, number, parts, transaction);
+  if (evidenceOf(report).digits < DIGITS_OF_EVERY_ENTRY) {
+    await queueRefinement(db, { orbitNumber: number, digits: DIGITS_OF_EVERY_ENTRY, askedBy: null }, transaction);
+  }
   return number;
 }
 
@@ -75,7 +86,7 @@ async function createRow(number: number, parts: EntryParts, transaction: Transac
       ...{ period: numberOf(orbit.period).value, periodDigits: orbit.period, returns: orbit.returns },
       ...{ stability: orbit.stability, unstableDirections: orbit.unstableDirections },
       ...{ unstableMultiplier: largestModulus(orbit), itinerary: orbit.itinerary },
-      digits: report.digits?.confirmed ?? 0,
+      ...evidenceOf(report),
       searchText: searchText(parts, accession, contributor.name),
       incipit: parts.incipit,
       ...{ submissionId: submission.id, contributorId: contributor.id, curatorId: parts.curatorId },

@@ -1,4 +1,5 @@
-import type { CheckedOrbit, CheckReport, SubmissionBody } from '@/schemas/generated/contract';
+import type { CheckedOrbit, CheckReport, Entry, SubmissionBody } from '@/schemas/generated/contract';
+import { DIGITS_OF_DOUBLES } from '@/server/checks/refine-orbit';
 import { sizesOf } from '@/server/checks/same-crossings';
 import type { CheckedSystem } from '@/server/formulas/checked-system';
 import type { EntryContent } from '@/server/models/orbit-revision';
@@ -34,6 +35,12 @@ export const entryContent = (report: ClosedReport, submitted: SubmissionBody): E
     engine: report.engine.version,
   };
 };
+
+/** How a report knows its figures: to more digits than doubles hold, they were refined. */
+export function evidenceOf({ digits }: ClosedReport): { evidence: Entry['evidence']['level']; digits: number } {
+  const confirmed = digits?.confirmed ?? 0;
+  return { evidence: confirmed > DIGITS_OF_DOUBLES ? 'refined' : 're-integrated', digits: confirmed };
+}
 
 /** Modulus of the largest multiplier; 0 for an orbit of one variable, which has none. */
 export function largestModulus({ multipliers }: CheckedOrbit): number {

@@ -40,10 +40,18 @@ export function exportOrbits(
 ): Promise<void> {
   return readOnly(pool, statementMs, async (client) => {
     await client.query(`set local idle_in_transaction_session_timeout = ${IDLE_MS}`);
-    const resolved = await resolveSearch(client, search);
-    const shape = await shapeOf(client, resolved);
-    await write({ shape, rows: rowsOf(client, resolved) });
+    await write(await openExport(client, search));
   });
+}
+
+/**
+ * The same within a transaction of the caller's: one export at a time, read to its end before the next.
+ *
+ * @throws {Problem} `invalid-query`.
+ */
+export async function openExport(client: PoolClient, search: OrbitSearch): Promise<OrbitExport> {
+  const resolved = await resolveSearch(client, search);
+  return { shape: await shapeOf(client, resolved), rows: rowsOf(client, resolved) };
 }
 
 async function shapeOf(client: PoolClient, search: ResolvedSearch): Promise<ExportShape> {
@@ -74,8 +82,9 @@ async function* rowsOf(client: PoolClient, search: ResolvedSearch): AsyncGenerat
   for (;;) {
     const { rows } = await client.query<EntryRow>(`fetch ${BATCH} from entries`);
     yield* rows;
-    if (rows.length < BATCH) return;
+    if (rows.length < BATCH) break;
   }
+  await client.query('close entries');
 }
 
 const nearJoin = ({ place, sort }: ResolvedSearch, binds: Binds): string =>

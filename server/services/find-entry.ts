@@ -1,21 +1,25 @@
 import type { Pool } from 'pg';
-import { Problem } from '@/server/errors';
+import { notFound, Problem } from '@/server/errors';
 import { readAccession } from '@/server/services/accession';
-import { type EntryRow, entryColumns, entryTables } from '@/server/services/entry-rows';
+import { type EntryRow, entryColumns, tablesWith } from '@/server/services/entry-rows';
 
 /**
  * The entry of an accession as somebody typed it, withdrawn or not.
  *
- * @throws {Problem} `wrong-check-character`, which names the right accession, or `unknown-accession`.
+ * @param revision one of its revisions; null: the current one.
+ * @throws {Problem} `wrong-check-character`, which names the right accession, `unknown-accession`, or `not-found` where it
+ *   has no such revision.
  */
-export async function findEntry(pool: Pool, typed: string): Promise<EntryRow> {
+export async function findEntry(pool: Pool, typed: string, revision: number | null = null): Promise<EntryRow> {
   const accession = knownAccession(typed);
   const { rows } = await pool.query<EntryRow>(
-    `select ${entryColumns} from orbit o ${entryTables} where o.accession = $1`,
-    [accession],
+    `select ${entryColumns} from orbit o ${tablesWith('coalesce($2::integer, o.revision)')} where o.accession = $1`,
+    [accession, revision],
   );
-  if (!rows[0]) throw new Problem('unknown-accession', `There is no entry ${accession}.`);
-  return rows[0];
+  if (rows[0]) return rows[0];
+  if (revision === null) throw new Problem('unknown-accession', `There is no entry ${accession}.`);
+  await findEntry(pool, typed);
+  throw notFound(`revision ${revision} of ${accession}`);
 }
 
 function knownAccession(typed: string): string {

@@ -10,7 +10,7 @@ import {
   turnOf,
 } from '@/server/services/submission-rows';
 
-export type SubmissionQueue = 'mine' | 'review';
+export type SubmissionQueue = 'mine' | 'review' | 'returned';
 
 /** Where the page before ended. */
 export type SubmissionPlace = readonly [time: string, id: string];
@@ -29,7 +29,7 @@ interface Request {
   after: SubmissionPlace | null;
 }
 
-/** Mine, latest change first; to review, longest waiting first. */
+/** Mine, latest change first; to review and returned, longest waiting first. */
 const orders: Readonly<Record<SubmissionQueue, { where: string; column: string; goesOn: string; order: string }>> = {
   mine: { where: 's.owner_id = $2', column: 's.updated_at', goesOn: '<', order: 'desc' },
   review: {
@@ -39,9 +39,15 @@ const orders: Readonly<Record<SubmissionQueue, { where: string; column: string; 
     goesOn: '>',
     order: 'asc',
   },
+  returned: {
+    where: `s.review_state = 'returned' and $2::uuid is not null`,
+    column: 's.updated_at',
+    goesOn: '>',
+    order: 'asc',
+  },
 };
 
-/** One page of a person's submissions, or of those to review, with how many wait for whom. */
+/** One page of a person's submissions, of those to review, or of those returned, with how many wait for whom. */
 export async function listSubmissions(db: Sequelize, person: Person, request: Request): Promise<SubmissionList> {
   const { where, column, goesOn, order } = orders[request.queue];
   const rows = await db.query<SubmissionRow & { place: string }>(

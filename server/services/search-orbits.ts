@@ -23,6 +23,7 @@ export interface FoundPage {
   /** Where the next page begins; null at the end. */
   last: string[] | null;
   total: OrbitPage['total'];
+  upToSymmetry: OrbitPage['upToSymmetry'];
 }
 
 interface PageRequest {
@@ -47,7 +48,7 @@ export function searchOrbits(pool: Pool, search: OrbitSearch, request: PageReque
     return {
       rows,
       last: found.length > request.limit ? (rows.at(-1)?.place_texts ?? null) : null,
-      total: await countOrbits(client, resolved),
+      ...(await countOrbits(client, resolved)),
     };
   });
 }
@@ -78,15 +79,35 @@ const distanceOf = ({ place }: ResolvedSearch, binds: Binds): string =>
     ? 'null::float8'
     : `(select min(x.place <-> ${binds.add(place)}::cube) from crossing x where x.system_id = o.system_id and x.orbit_number = o.number)`;
 
-/** How many entries a search has, counted up to `MAX_COUNTED`. */
-async function countOrbits(client: PoolClient, search: ResolvedSearch): Promise<OrbitPage['total']> {
+interface Counts {
+  found: number;
+  /** Entries of which no image was accepted earlier. */
+  different: number;
+  symmetries: string[] | null;
+}
+
+/** How many entries a search has, counted up to `MAX_COUNTED`, and how many up to the symmetries of its system. */
+async function countOrbits(
+  client: PoolClient,
+  search: ResolvedSearch,
+): Promise<Pick<FoundPage, 'total' | 'upToSymmetry'>> {
   const binds = new Binds();
   const conditions = orbitConditions(search, binds);
-  const { rows } = await client.query<{ found: number }>(
-    `select count(*)::integer as found from
-       (select 1 from orbit o where ${conditions.join(' and ')} limit ${binds.add(MAX_COUNTED + 1)}) o`,
+  const { rows } = await client.query<Counts>(
+    `with found as materialized
+       (select o.number from orbit o where ${conditions.join(' and ')} limit ${binds.add(MAX_COUNTED + 1)}),
+     image as (select i.* from orbit_image i join found o on o.number = i.orbit_number join found m on m.number = i.image_number)
+     select count(*)::integer as found,
+       count(*) filter (where not exists
+         (select from image where image.orbit_number = found.number and image.image_number < found.number))::integer as different,
+       (select array_agg(distinct symmetry order by symmetry) from image) as symmetries
+     from found`,
     binds.values,
   );
-  const found = rows[0]?.found ?? 0;
-  return found > MAX_COUNTED ? { value: MAX_COUNTED, relation: 'at-least' } : { value: found, relation: 'exact' };
+  const { found, different, symmetries } = rows[0]!;
+  if (found > MAX_COUNTED) return { total: { value: MAX_COUNTED, relation: 'at-least' }, upToSymmetry: null };
+  return {
+    total: { value: found, relation: 'exact' },
+    upToSymmetry: search.found && symmetries ? { value: different, symmetries } : null,
+  };
 }

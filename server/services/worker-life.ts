@@ -5,6 +5,7 @@ import { OrbitCheck } from '@/server/models/orbit-check';
 import { TRIES } from '@/server/services/check-limits';
 import type { Desk } from '@/server/services/desk';
 import { failCheck } from '@/server/services/run-check';
+import { failRefinement } from '@/server/services/run-refinement';
 
 /** A worker tells this often that it lives. */
 export const BEAT_EVERY_MS = 3_000;
@@ -26,7 +27,7 @@ export async function leave(db: Sequelize, id: string): Promise<void> {
 }
 
 /**
- * Give the jobs of dead workers to the living, and give up checks whose tries are used up.
+ * Give the jobs of dead workers to the living, and give up checks and refinements whose tries are used up.
  *
  * A job locked under a name that no living worker goes by belonged to one that died.
  *
@@ -48,6 +49,7 @@ export async function takeOverJobs(desk: Desk): Promise<number> {
   const names = freed?.names ?? [];
   if (names.length > 0) await db.query('select graphile_worker.force_unlock_workers($1)', { bind: [names] });
   await giveUpChecks(desk);
+  await giveUpRefinements(db);
   return names.length;
 }
 
@@ -62,5 +64,19 @@ async function giveUpChecks(desk: Desk): Promise<void> {
   );
   for (const check of lost) {
     await failCheck(desk, check, `The worker ended during the check, ${TRIES} times in a row.`);
+  }
+}
+
+/** Refinements that nobody will try again, for the same reason. */
+async function giveUpRefinements(db: Sequelize): Promise<void> {
+  const lost = await db.query<{ id: string }>(
+    `select r.id from refinement r
+     where r.state in ('queued', 'running') and not exists (
+       select 1 from graphile_worker.jobs j
+       where j.key = r.id::text and (j.locked_at is not null or j.attempts < j.max_attempts))`,
+    { type: QueryTypes.SELECT },
+  );
+  for (const refinement of lost) {
+    await failRefinement(refinement, `The worker ended during the computation, ${TRIES} times in a row.`);
   }
 }

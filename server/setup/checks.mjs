@@ -15,6 +15,7 @@ const STEPS = [
   { name: 'format', check: () => runBin('prettier', ['--check', '--log-level', 'warn', '.']) },
   { name: 'types', check: () => runBin('tsc', ['--noEmit', '-p', 'tsconfig.json']) },
   { name: 'generated code', check: generatedIsCurrent },
+  { name: 'the description of the API', check: () => runTsx('server/setup/lint-openapi.ts') },
   { name: 'unused code', check: () => runBin('knip', []) },
   { name: 'lint', check: () => runBin('eslint', ['--max-warnings', '0', '.']) },
 ];
@@ -33,12 +34,14 @@ export function runChecks() {
 
 const runBin = (name, args) => run(join(root, 'node_modules', '.bin', name), args, { cwd: root }) === 0;
 
+const runTsx = (program) => run(process.execPath, ['--import', 'tsx', program], { cwd: root }) === 0;
+
 /** Write the generated code again: what is in the repository must be what its source says. */
 function generatedIsCurrent() {
   let current = true;
   for (const { folder, program } of GENERATED) {
     const before = contents(folder);
-    if (run(process.execPath, ['--import', 'tsx', program], { cwd: root }) !== 0) current = false;
+    if (!runTsx(program)) current = false;
     const after = contents(folder);
     if (before !== after) {
       say(`${folder} was not what ${program} writes. It is now: look at the difference and commit it.`);

@@ -151,6 +151,7 @@ describe('signing in', () => {
     expect((await agent.get('/api/v1/session')).body).toEqual({
       user: expect.objectContaining({ id: user.id, role: 'curator' }),
       waiting: 0,
+      digest: true,
       development: true,
     });
     expect((await agent.delete('/api/v1/session')).status).toBe(204);

@@ -87,7 +87,7 @@ describe('the page of an entry, before any script runs', () => {
     async (path) => {
       const res = await page(path);
       expect([res.status, res.headers['x-robots-tag']]).toEqual([404, 'noindex']);
-      expect(res.text).toContain('<div id="root"></div>');
+      expect(res.text).toContain('<div id="root">');
     },
   );
 });
@@ -126,7 +126,7 @@ describe('what is for crawlers', () => {
     const pages = await Promise.all(files.map(async (file) => (await request(site).get(file)).text));
     const addresses = [...pages.join('').matchAll(/<loc>https:\/\/orbits\.example(\/[^<]*)<\/loc>/g)];
     expect(addresses.map(([, path]) => path)).toEqual([
-      ...['/', '/systems', '/systems/lorenz'],
+      ...['/', '/systems', '/releases', '/systems/lorenz'],
       ...['/orbits/RTN-0000001X', '/orbits/RTN-00000028'],
     ]);
     expect(pages[1]).toMatch(/<lastmod>\d{4}-\d\d-\d\d<\/lastmod>/);

@@ -1,13 +1,14 @@
 import { LICENCE } from '@/server/caution';
 import type { EntryRow } from '@/server/services/entry-rows';
 
-/** What every form of citation says about an entry, as plain text on one line each. */
+/** What every form of citation says about an entry or a release, as plain text on one line each. */
 export interface Citation {
-  accession: string;
-  /** The contributor, as they write themselves: people's names are not taken apart. */
+  /** Under which it is known: an accession. */
+  key: string;
+  /** As they write themselves: people's names are not taken apart. */
   author: string;
   title: string;
-  /** Which revision, and that the entry is withdrawn where it is. */
+  /** Which revision, and that an entry is withdrawn where it is. */
   version: string;
   /** When that revision was made. */
   date: { year: number; month: number; day: number };
@@ -30,7 +31,7 @@ export function citationOf(row: EntryRow, publicUrl: string): Citation {
   const itinerary = row.itinerary === null ? '' : `, itinerary ${row.itinerary}`;
   const revised = row.revised_at;
   return {
-    accession: row.accession,
+    key: row.accession,
     author: oneLine(row.contributor_name),
     title: `Periodic orbit ${row.accession} of the system ${oneLine(row.system_name)} (T = ${shortPeriod(row)}, ${returns})`,
     version: `revision ${row.revision}${row.status === 'withdrawn' ? ', withdrawn' : ''}`,

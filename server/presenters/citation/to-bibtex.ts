@@ -13,7 +13,7 @@ const ESCAPES: Readonly<Record<string, string>> = {
 const MONTHS = ['jan', 'feb', 'mar', 'apr', 'may', 'jun', 'jul', 'aug', 'sep', 'oct', 'nov', 'dec'];
 
 /** A citation as a BibTeX entry. Names and titles stand in double braces: no style changes their case or order. */
-export function toBibtex({ accession, author, title, version, date, publisher, address, note }: Citation): string {
+export function toBibtex({ key, author, title, version, date, publisher, address, note }: Citation): string {
   const fields = [
     ['author', `{{${escaped(author)}}}`],
     ['title', `{{${escaped(title)}}}`],
@@ -21,12 +21,12 @@ export function toBibtex({ accession, author, title, version, date, publisher, a
     ['month', MONTHS[date.month - 1]!],
     ['howpublished', `{${escaped(publisher)}}`],
     ['version', `{${escaped(version)}}`],
-    ['number', `{${accession}}`],
+    ['number', `{${key}}`],
     // The address is a web address: biblatex and the url package read it verbatim.
     ['url', `{${address}}`],
     ['note', `{${escaped(`${version} of ${date.year}-${two(date.month)}-${two(date.day)}. ${note}`)}}`],
   ] as const;
-  return `@misc{${accession},\n${fields.map(([name, value]) => `  ${name} = ${value},\n`).join('')}}\n`;
+  return `@misc{${key},\n${fields.map(([name, value]) => `  ${name} = ${value},\n`).join('')}}\n`;
 }
 
 const escaped = (text: string): string => Array.from(text, (character) => ESCAPES[character] ?? character).join('');

@@ -1,16 +1,16 @@
 import type { Citation } from '@/server/presenters/citation/citation';
 
 /** A citation as CSL-JSON: a list of one item. */
-export function toCslJson({ accession, author, title, version, date, publisher, address, note }: Citation): string {
+export function toCslJson({ key, author, title, version, date, publisher, address, note }: Citation): string {
   const item = {
-    id: accession,
+    id: key,
     type: 'dataset',
     title,
     author: [{ literal: author }],
     issued: { 'date-parts': [[date.year, date.month, date.day]] },
     publisher,
     version,
-    number: accession,
+    number: key,
     URL: address,
     note,
   };

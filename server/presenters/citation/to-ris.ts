@@ -1,11 +1,11 @@
 import type { Citation } from '@/server/presenters/citation/citation';
 
 /** A citation as RIS; lines end in CR LF, as the format has it. */
-export function toRis({ accession, author, title, version, date, publisher, address, note }: Citation): string {
+export function toRis({ key, author, title, version, date, publisher, address, note }: Citation): string {
   const two = (number: number): string => String(number).padStart(2, '0');
   const lines = [
     ['TY', 'DATA'],
-    ['ID', accession],
+    ['ID', key],
     ['AU', author],
     ['TI', title],
     ['PY', String(date.year)],
