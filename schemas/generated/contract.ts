@@ -19,6 +19,7 @@ export type FindingCode =
   | 'itinerary-differs'
   | 'invariant-drifts'
   | 'not-converged'
+  | 'not-refined'
   | 'point-off-section'
   | 'wrong-crossing-direction'
   | 'tangent-crossing'

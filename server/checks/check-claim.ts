@@ -5,7 +5,7 @@ import { multiplierClaims, returnClaims } from '@/server/checks/claims';
 import { correctedAsClosed, typedAsClosed } from '@/server/checks/closed-orbit';
 import { closesLater, partOfPeriod } from '@/server/checks/closes-later';
 import { convergence } from '@/server/checks/convergence';
-import { correctClaim } from '@/server/checks/correct-claim';
+import { correctClaim, type ClaimCorrection } from '@/server/checks/correct-claim';
 import { decimalOf } from '@/server/checks/decimal-of';
 import { digitsOf, expectedClosure, tooFewDigits } from '@/server/checks/digits';
 import { equilibrium } from '@/server/checks/equilibrium';
@@ -19,6 +19,7 @@ import { repeatSurvey } from '@/server/checks/repeat-survey';
 import { repeatedOrbit, type RepeatedOrbit } from '@/server/checks/repeated-orbit';
 import { checkedOrbit, closureOf, correctionOf, emptyReport } from '@/server/checks/report';
 import { runFailure } from '@/server/checks/run-failure';
+import { runOfPoints } from '@/server/checks/run-of-points';
 import { selfCheck } from '@/server/checks/self-check';
 import { crossingDirection, offSection, startPoint } from '@/server/checks/start-point';
 import { stiffness } from '@/server/checks/stiffness';
@@ -27,6 +28,7 @@ import { SuggestionFinder } from '@/server/checks/suggestion';
 import { surveyOrbit } from '@/server/checks/survey-orbit';
 import { isTangent, transversalityFindings } from '@/server/checks/transversality';
 import { shiftsOf, verdictOf } from '@/server/checks/verdict';
+import { type FlowFailure } from '@/server/numerics/periodic/shoot';
 import { smallestTransversality } from '@/server/numerics/periodic/smallest-transversality';
 
 type Answer = Omit<CheckReport, 'engine'>;
@@ -66,15 +68,27 @@ export class ClaimCheck {
     if (atRest.length > 0) return this.answer({ findings: atRest });
     const onSection = point.beyond === 0;
     const raw = rawRun(claim, { start: point.start, onSection, period: claim.period.value }, this.runControl());
-    if (!raw.ok) {
-      const isLimit = raw.reason === 'stopped' || raw.reason === 'too-many-steps';
-      const findings = [runFailure(raw, claim.variables, this.control.maxSteps)];
-      return this.answer({ verdict: isLimit ? 'inconclusive' : 'does-not-close', findings });
-    }
+    if (!raw.ok) return this.alongPoints(point.start) ?? this.ended(raw);
     this.steps += raw.stepEnds.length;
     const off = offSection(claim, point, raw.sizes);
     if (off.length > 0) return this.answer(this.ofRaw(raw, off));
     return this.direction(raw);
+  }
+
+  /** A run that ended early. */
+  private ended(failure: FlowFailure): Answer {
+    const isLimit = failure.reason === 'stopped' || failure.reason === 'too-many-steps';
+    const findings = [runFailure(failure, this.claim.variables, this.control.maxSteps)];
+    return this.answer({ verdict: isLimit ? 'inconclusive' : 'does-not-close', findings });
+  }
+
+  /** An orbit whose run departs from it and ends early, if its section points lead to it all the same. */
+  private alongPoints(start: Float64Array): Answer | null {
+    const { claim } = this;
+    const run = runOfPoints(claim, start, this.runControl());
+    if (run === null || crossingDirection(claim, start, run.sizes).length > 0) return null;
+    const corrected = correctClaim(claim, run, this.runControl());
+    return corrected.correction.converged ? this.judged(corrected) : null;
   }
 
   /** The section: is it crossed the counted way, and does the flow come back to it? */
@@ -95,16 +109,23 @@ export class ClaimCheck {
     const { claim, control } = this;
     const repeated = typed.relative <= claim.tolerance ? null : repeatedOrbit(claim, typed, this.runControl());
     if (repeated !== null) return this.repetition(typed, repeated);
-    const { raw, correction } = correctClaim(claim, typed, {
+    const corrected = correctClaim(claim, typed, {
       ...this.runControl(),
       onIteration: (iteration) => this.report({ phase: 'correcting', iteration }, typed),
     });
-    this.steps += correction.steps;
-    const failure = correction.converged ? null : correction.failure;
+    const { converged } = corrected.correction;
+    const failure = converged ? null : corrected.correction.failure;
     if (failure !== null && (failure.reason === 'stopped' || failure.reason === 'too-many-steps')) {
       const findings = [runFailure(failure, claim.variables, control.maxSteps)];
-      return this.answer({ ...this.ofRaw(raw, findings), verdict: 'inconclusive' });
+      return this.answer({ ...this.ofRaw(typed, findings), verdict: 'inconclusive' });
     }
+    return this.judged(corrected);
+  }
+
+  /** The verdict, and what is measured on the orbit that was found. */
+  private judged({ raw, correction }: ClaimCorrection): Answer {
+    const { claim } = this;
+    this.steps += correction.steps;
     const shifts = shiftsOf(claim, raw, correction);
     const verdict = verdictOf(claim.tolerance, raw, shifts);
     const closed = correction.converged
@@ -143,7 +164,8 @@ export class ClaimCheck {
     this.report({ phase: 'measuring', iteration: correction.iterations, returns }, raw);
     const isOpen = verdict === 'does-not-close';
     const few = tooFewDigits(study);
-    const turns = isOpen && few.length === 0 ? closesLater(claim, raw, this.runControl()) : null;
+    const hasEnd = Number.isFinite(raw.relative);
+    const turns = isOpen && hasEnd && few.length === 0 ? closesLater(claim, raw, this.runControl()) : null;
     const findings = [...few, ...(few.length > 0 ? [] : turns === null ? convergence(study) : partOfPeriod(turns))];
     if (survey === null) findings.push(...this.tangency(raw));
     else {
@@ -209,7 +231,7 @@ export class ClaimCheck {
     return {
       verdict: verdictOf(tolerance, raw, null),
       closure: closureOf(raw, tolerance),
-      endPoint: Array.from(raw.end, decimalOf),
+      endPoint: Number.isFinite(raw.relative) ? Array.from(raw.end, decimalOf) : null,
       findings,
     };
   }

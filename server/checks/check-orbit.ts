@@ -5,12 +5,13 @@ import { ENGINE_VERSION } from '@/server/checks/engine-version';
 import { STEPS_DEFAULT, STEPS_LARGEST } from '@/server/checks/limits';
 import { type CatalogueOrbit } from '@/server/checks/match-orbits';
 import { readClaim, type ClaimBody } from '@/server/checks/read-claim';
+import { refineReport } from '@/server/checks/refine-report';
 import { type CheckedSystem } from '@/server/formulas/checked-system';
 
 /** An orbit to be checked. */
 export interface CheckOptions {
   system: CheckedSystem;
-  claim: ClaimBody;
+  claim: ClaimBody & { digits?: number };
   /** Entries of the same system and parameters that it might be. */
   catalogue?: readonly CatalogueOrbit[];
   /** In a submission an orbit that is known already is a blocker, in a trial a note. */
@@ -39,7 +40,7 @@ export function checkOrbit(options: CheckOptions): CheckReport {
     shouldStop: options.shouldStop,
     onProgress: options.onProgress,
   });
-  const answer = check.run();
+  const answer = refineReport(check.run(), options);
   const cpuMs = Math.round((performance.now() - begun) * 1000) / 1000;
   return { ...answer, engine: { version: ENGINE_VERSION, steps: check.steps, cpuMs } };
 }

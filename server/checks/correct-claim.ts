@@ -32,7 +32,7 @@ export function correctClaim(claim: Claim, raw: RawRun, control: CorrectionContr
     const points = [raw.start, ...stated];
     const chain = chainOfPoints({ flow: claim.flow, points, longest: input.period, maxSteps, shouldStop });
     if (chain !== null) {
-      const sizes = orbitSizes(chain.extent, claim.moduli);
+      const sizes = orbitSizes(chain.watch.extent(), claim.moduli);
       const correction = correctOrbit({ ...input, chain, period: chain.period, sizes });
       if (correction.converged || correction.failure !== null) return { raw: { ...raw, sizes }, correction };
     }

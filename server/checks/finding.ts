@@ -7,6 +7,7 @@ const WARNINGS: readonly FindingCode[] = [
   'itinerary-differs',
   'invariant-drifts',
   'not-converged',
+  'not-refined',
 ];
 
 /** What a finding says. */

@@ -1,11 +1,10 @@
-import { type CheckRequest } from '@/schemas/generated/contract';
 import { type Claim } from '@/server/checks/claim';
 import { correctClaim } from '@/server/checks/correct-claim';
 import { ENGINE_VERSION } from '@/server/checks/engine-version';
 import { STEPS_LARGEST } from '@/server/checks/limits';
 import { preciseSystem } from '@/server/checks/precise-system';
 import { rawRun } from '@/server/checks/raw-run';
-import { readClaim } from '@/server/checks/read-claim';
+import { readClaim, type ClaimBody } from '@/server/checks/read-claim';
 import { startPoint } from '@/server/checks/start-point';
 import { type CheckedSystem } from '@/server/formulas/checked-system';
 import { parseSection } from '@/server/formulas/parse-section';
@@ -61,7 +60,7 @@ export interface RefinementFailure {
 export interface RefinementRequest {
   system: CheckedSystem;
   /** What was checked; `hold` says what a family keeps, at its value in the point as typed. */
-  claim: CheckRequest;
+  claim: ClaimBody;
   orbit: { point: readonly string[]; period: string; crossings?: readonly { point: readonly string[] }[] };
   digits: number;
   shouldStop?: (() => boolean) | undefined;
@@ -107,6 +106,7 @@ function refined(request: RefinementRequest, claim: Claim): Refinement | Refinem
   const result = refinePeriodic(
     {
       ...{ flow: claim.flow, precise, orbit: correction, sizes: raw.sizes, digits, shouldStop },
+      anchor: ({ bits }) => exactPoint(request.orbit.point, bits),
       hold: hold === null ? null : heldAt(request.claim, claim, { precise, first: correction.nodes[0]! }),
     },
     (segment, step) => finder.see(segment, step),
@@ -124,18 +124,21 @@ function knownCrossings({ period, plan, watch }: CorrectedOrbit): { times: numbe
 
 /** What is held stays at its value in the point as typed. */
 function heldAt(
-  typed: CheckRequest,
+  typed: ClaimBody,
   claim: Claim,
   { precise, first }: { precise: PreciseFlow; first: Float64Array },
 ): RefinementInput['hold'] {
   return {
     gradient: claim.hold!.gradientAt(first),
     target: (precision) => {
-      const point = typed.point.map((x) => fixedOfRational(parseRational(String(x)), precision.bits));
-      return precise.valuesAt(point, precision).hold!;
+      return precise.valuesAt(exactPoint(typed.point, precision.bits), precision).hold!;
     },
   };
 }
+
+/** A point as typed, to the last bit. */
+const exactPoint = (typed: readonly (string | number)[], bits: number): bigint[] =>
+  typed.map((x) => fixedOfRational(parseRational(String(x)), bits));
 
 interface Found {
   crossings: readonly PreciseCrossing[];

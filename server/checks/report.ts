@@ -20,8 +20,9 @@ export const emptyReport = {
   suggestion: null,
 } as const satisfies Omit<CheckReport, 'engine'>;
 
-/** The closure of the orbit as typed. */
+/** The closure of the orbit as typed; null where its run ended before the period. */
 export function closureOf({ absolute, relative }: RawRun, tolerance: number): CheckReport['closure'] {
+  if (!Number.isFinite(relative)) return null;
   return { absolute, relative, tolerance };
 }
 

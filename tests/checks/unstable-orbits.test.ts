@@ -2,8 +2,9 @@ import type { CheckReport } from '@/schemas/generated/contract';
 import { checkOrbit } from '@/server/checks/check-orbit';
 import { type ClaimBody, readClaim } from '@/server/checks/read-claim';
 import forty from '@/tests/reference/lorenz-40.json';
+import { loadLorenzOrbits } from '@/tests/reference/load-orbits';
 import { roundDecimal } from '@/tests/reference/round-decimal';
-import { lorenz, LORENZ_AB } from './claims';
+import { lorenz, LORENZ_AB, systemOf } from './claims';
 
 const check = (claim: ClaimBody): CheckReport => checkOrbit({ system: lorenz, claim });
 const codesOf = ({ findings }: CheckReport) => findings.map(({ code }) => code);
@@ -139,5 +140,68 @@ describe('an orbit run through so often that it departs from itself', () => {
     const report = check({ section: 'z-27', point, period: '31.17304', returns: 40 });
     expect(report.verdict).toBe('does-not-close');
     expect(codesOf(report)).toEqual(['too-few-digits', 'period-is-multiple']);
+  });
+});
+
+describe('the same orbit with time turned round', () => {
+  const backwards = systemOf({
+    name: 'Lorenz, time turned round',
+    variables: [{ name: 'x' }, { name: 'y' }, { name: 'z' }],
+    parameters: [{ name: 'beta', value: '8/3' }],
+    equations: { x: '-10*(y - x)', y: '-(28*x - y - x*z)', z: '-(x*y - beta*z)' },
+  });
+  const table = loadLorenzOrbits();
+
+  /** A line of the table, run through the other way, from its first point or from all. */
+  function turnedRound(code: string, { withPoints }: { withPoints: boolean }): CheckReport {
+    const { points, period } = table.find((one) => one.code === code)!;
+    const [first, ...others] = [points[0]!, ...points.slice(1).reverse()].map(([x, y]) => [x, y, '27']);
+    const claim = {
+      ...{ section: { formula: '27 - z' }, point: first!, period, returns: points.length },
+      ...(withPoints && { points: others }),
+    };
+    return checkOrbit({ system: backwards, claim, limits: { maxSteps: 3000 } });
+  }
+
+  // What shrank by e^(−∫|div|) grows by as much: 8.4e9, 4.5e14, 4.1e24, 6.7e58.
+  it.each([
+    ['AB', false],
+    ['AAB', false],
+    ['AABAB', true],
+    ['AAABBABABABB', true],
+  ])('%s closes, points stated: %s, and has the inverse multipliers', (code, withPoints) => {
+    const { verdict, findings, orbit } = turnedRound(code, { withPoints });
+    expect(verdict).toBe('closes-after-correction');
+    expect(findings).toEqual([]);
+    const { logAbsMultipliers, period } = table.find((one) => one.code === code)!;
+    expect(Math.abs(Number(orbit!.period) / Number(period) - 1)).toBeLessThan(1e-14);
+    const found = orbit!.multipliers.map(({ re }) => -Math.log(Number(re)));
+    const [unstable, stable] = logAbsMultipliers.map(Number);
+    expect(Math.abs(found[0]! - stable!)).toBeLessThan(1e-11);
+    expect(Math.abs(found[1]! - unstable!)).toBeLessThan(1e-11);
+  });
+
+  it('has no closure where its run ends early, and ends so where one point is all there is', () => {
+    expect(turnedRound('AABAB', { withPoints: true })).toMatchObject({ closure: null, endPoint: null });
+    expect(codesOf(turnedRound('AABAB', { withPoints: false }))).toEqual(['too-long']);
+  });
+});
+
+describe('an orbit from another of its crossings', () => {
+  it.each(['AABAB', 'AAABBABABABB'])('%s is the same', (code) => {
+    const { points, period } = loadLorenzOrbits().find((one) => one.code === code)!;
+    const reports = [0, 1, 4].map((k) =>
+      check({ section: 'z-27', point: [...points[k]!, '27'], period, returns: points.length }),
+    );
+    const [first, ...others] = reports;
+    for (const { verdict, findings, orbit } of others) {
+      expect(verdict).toBe(first!.verdict);
+      expect(findings).toEqual(first!.findings);
+      expect(orbit!.itinerary).toBe(code);
+      expect(Math.abs(Number(orbit!.period) / Number(period) - 1)).toBeLessThan(1e-14);
+      orbit!.exponents.forEach((exponent, i) => {
+        expect(Math.abs(exponent - first!.orbit!.exponents[i]!)).toBeLessThan(1e-11);
+      });
+    }
   });
 });
