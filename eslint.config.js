@@ -14,7 +14,10 @@ const DIGIT_FOLDERS = [
   'features/{plot,notation}/**',
   'tests/**',
 ];
-const ENTRY_POINTS = ['server/*.ts', 'server/{setup,cluster}/**', 'schemas/generate.ts', 'tests/support/**'];
+const ENTRY_POINTS = [
+  ...['server/*.ts', 'server/{setup,cluster}/**', 'schemas/generate.ts', 'tests/support/**'],
+  ...['tests/bench/*.ts', 'tests/reference/verify-dataset.ts'],
+];
 
 const lines = (max) => ['error', { max, skipBlankLines: true, skipComments: true }];
 
