@@ -52,12 +52,15 @@ module.exports = {
       globalSetup: '<rootDir>/tests/support/global-setup.js',
       globalTeardown: '<rootDir>/tests/support/global-teardown.js',
       // The library that reads citations back fetches through packages of ES modules.
-      transformIgnorePatterns: ['/node_modules/(?!(?:.*/)?(?:node-fetch|data-uri-to-buffer|fetch-blob|formdata-polyfill)/)'],
+      transformIgnorePatterns: [
+        '/node_modules/(?!(?:.*/)?(?:node-fetch|data-uri-to-buffer|fetch-blob|formdata-polyfill)/)',
+      ],
     }),
     {
       displayName: 'features',
       rootDir: __dirname,
       preset: 'jest-expo/web',
+      setupFilesAfterEnv: ['<rootDir>/tests/support/patience.ts'],
       testMatch: ['<rootDir>/tests/features/**/*.test.{ts,tsx}'],
       moduleNameMapper: alias,
       transform: webTransform,

@@ -12,6 +12,10 @@ import * as createOrbitRevisions from './20261201T0617-create-orbit-revisions';
 import * as forbidRewriting from './20261201T0618-forbid-rewriting';
 import * as guardPeople from './20261201T0619-guard-people';
 import * as createWorkers from './20261201T0620-create-workers';
+import * as createReleases from './20261201T1210-create-releases';
+import * as createOrbitImages from './20261201T1230-create-orbit-images';
+import * as addDigests from './20261201T1240-add-digests';
+import * as createRefinements from './20261201T1250-create-refinements';
 
 /** Every migration in order; the names are what the database remembers. */
 export const migrations: readonly NamedMigration[] = [
@@ -28,4 +32,8 @@ export const migrations: readonly NamedMigration[] = [
   { name: '20261201T0618-forbid-rewriting', ...forbidRewriting },
   { name: '20261201T0619-guard-people', ...guardPeople },
   { name: '20261201T0620-create-workers', ...createWorkers },
+  { name: '20261201T1210-create-releases', ...createReleases },
+  { name: '20261201T1230-create-orbit-images', ...createOrbitImages },
+  { name: '20261201T1240-add-digests', ...addDigests },
+  { name: '20261201T1250-create-refinements', ...createRefinements },
 ];

@@ -11,6 +11,8 @@ import { entryRoutes } from '@/server/routes/entries';
 import { checkRoutes } from '@/server/routes/checks';
 import { orbitRoutes } from '@/server/routes/orbits';
 import { passwordRoutes } from '@/server/routes/password';
+import { refinementRoutes } from '@/server/routes/refinements';
+import { releaseRoutes } from '@/server/routes/releases';
 import { sessionRoutes } from '@/server/routes/session';
 import { submissionRoutes } from '@/server/routes/submissions';
 import { systemRoutes } from '@/server/routes/systems';
@@ -31,6 +33,8 @@ export function apiRoutes(dependencies: AppDependencies): Router {
   api.use(submissionRoutes(dependencies));
   api.use(orbitRoutes(dependencies));
   api.use(entryRoutes(dependencies));
+  api.use(refinementRoutes(dependencies));
+  api.use(releaseRoutes(dependencies));
   api.use(openapiRoutes(dependencies));
   api.use(nothingHere);
   return api;

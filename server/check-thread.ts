@@ -3,10 +3,13 @@ import type { CheckReport, CheckRequest, SystemDocument, Trace } from '@/schemas
 import { type CheckProgress } from '@/server/checks/check-progress';
 import { checkOrbit } from '@/server/checks/check-orbit';
 import type { CatalogueOrbit } from '@/server/checks/match-orbits';
+import { refineOrbit } from '@/server/checks/refine-orbit';
 import { traceOrbit } from '@/server/checks/trace-orbit';
 import { checkSystem } from '@/server/formulas/check-system';
 import type { CheckedSystem } from '@/server/formulas/checked-system';
+import type { RefineOutcome, RefineTask } from '@/server/services/refiner';
 import type { TraceRequest } from '@/server/services/tracer';
+import { afterComputing, threadMs, yieldToOthers } from '@/server/thread-time';
 
 /** One check for a thread of the pool. */
 export interface CheckTask {
@@ -49,6 +52,14 @@ export function trace({ document, points, ...orbit }: TraceRequest): Trace {
   const drawn = traceOrbit(parsed(document), orbit, points);
   if (drawn === null) throw new RangeError('the orbit cannot be read');
   return drawn;
+}
+
+/** Compute one orbit to many digits, when nothing else has a use for the processor. */
+export function refine({ document, seconds, ...task }: RefineTask): RefineOutcome {
+  yieldToOthers();
+  const begun = threadMs();
+  const result = refineOrbit({ ...task, system: parsed(document), shouldStop: afterComputing(seconds) });
+  return { result, computeMs: threadMs() - begun };
 }
 
 function parsed(document: SystemDocument): CheckedSystem {

@@ -24,6 +24,8 @@ export const problemCodes = {
   'check-missing': { status: 409, title: 'There is no finished check of this revision' },
   'stale-check': { status: 409, title: 'The check is out of date' },
   'already-known': { status: 409, title: 'The orbit is already in the catalogue' },
+  'entry-withdrawn': { status: 409, title: 'The entry was withdrawn' },
+  'release-in-work': { status: 409, title: 'A release is being cut' },
   'last-administrator': { status: 409, title: 'The last administrator keeps the role' },
   'request-in-progress': { status: 409, title: 'The same request is being worked on' },
   'precondition-failed': { status: 412, title: 'It has changed meanwhile' },

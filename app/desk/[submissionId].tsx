@@ -1,5 +1,5 @@
 import { useLocalSearchParams } from 'expo-router';
-import { SubmissionScreen } from '@/features/desk/submission-screen';
+import { SubmissionScreen } from '@/features/desk/lazy-desk';
 
 export default function SubmissionRoute() {
   const { submissionId } = useLocalSearchParams<{ submissionId: string }>();

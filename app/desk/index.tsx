@@ -1,4 +1,4 @@
-import { DeskScreen } from '@/features/desk/desk-screen';
+import { DeskScreen } from '@/features/desk/lazy-desk';
 
 export default function DeskRoute() {
   return <DeskScreen />;

@@ -5,7 +5,7 @@ import {
   useInfiniteQuery,
   useQuery,
 } from '@tanstack/react-query';
-import type { Entry, EntryRevision, OrbitPage, System, Trace } from '@/schemas/generated/contract';
+import type { Entry, EntryImage, EntryRevision, OrbitPage, System, Trace } from '@/schemas/generated/contract';
 import { apiAddress, getJson, getText, type Query } from '@/features/api/client';
 
 /** What a catalogue search can ask for, under the names of the API. Every field is part of the cache key. */
@@ -86,6 +86,14 @@ export const orbitQueries = {
     }),
 
   /** The sentence to cite, and the same as BibTeX. */
+  /** The line to cite an entry by. */
+  citationLine: (accession: string) =>
+    queryOptions({
+      queryKey: [...root, 'citation-line', accession] as const,
+      queryFn: async ({ signal }) => (await getText(`${pathOf(accession)}.txt`, { signal })).trim(),
+      staleTime: Infinity,
+    }),
+
   citation: (accession: string) =>
     queryOptions({
       queryKey: [...root, 'citation', accession] as const,
@@ -95,6 +103,14 @@ export const orbitQueries = {
         );
         return { sentence: sentence!.trim(), bibtex: bibtex!.trim() };
       },
+      staleTime: SEARCH_FRESH_MS,
+    }),
+
+  /** Another entry may become an image while one looks. */
+  images: (accession: string) =>
+    queryOptions({
+      queryKey: [...root, 'images', accession] as const,
+      queryFn: ({ signal }) => getJson<{ items: EntryImage[] }>(`${pathOf(accession)}/images`, { signal }),
       staleTime: SEARCH_FRESH_MS,
     }),
 
@@ -136,11 +152,17 @@ export const useOrbit = (accession: string, enabled = true) => useQuery({ ...orb
 /** The polyline of one entry. */
 export const useOrbitTrace = (accession: string) => useQuery(orbitQueries.trace(accession));
 
+/** The line to cite an entry by. */
+export const useCitationLine = (accession: string) => useQuery(orbitQueries.citationLine(accession));
+
 /** How to cite an entry; fetched when somebody wants to. */
 export const useCitation = (accession: string, enabled: boolean) =>
   useQuery({ ...orbitQueries.citation(accession), enabled });
 
 export const useOrbitRevisions = (accession: string) => useQuery(orbitQueries.revisions(accession));
+
+/** Entries that are an entry's images under symmetries of its system. */
+export const useOrbitImages = (accession: string) => useQuery(orbitQueries.images(accession));
 
 /** The catalogue, page after page, under a filter; the former result stays while a new one is on its way. */
 export const useOrbitSearch = (filter: OrbitFilter, enabled = true) =>

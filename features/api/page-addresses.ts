@@ -11,3 +11,6 @@ export function searchHref(text: string, sort = ''): string {
   const query = new URLSearchParams({ ...(text && { q: text }), ...(sort && { sort }) }).toString();
   return query ? `/?${query}` : '/';
 }
+
+/** Address of a submission's page. */
+export const submissionHref = (id: string): string => `/desk/${encodeURIComponent(id)}`;

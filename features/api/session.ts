@@ -10,7 +10,7 @@ import type {
   SignIn,
   User,
 } from '@/schemas/generated/contract';
-import { deleteJson, getJson, postJson } from '@/features/api/client';
+import { deleteJson, getJson, postJson, requestJson } from '@/features/api/client';
 
 /** What waits on the Desk is asked for again after this long. */
 const FRESH_MS = 60_000;
@@ -45,6 +45,16 @@ export function useSignIn() {
       cache.setQueryData(sessionQuery().queryKey, session);
       await cache.invalidateQueries({ queryKey: sessionQuery().queryKey });
     },
+  });
+}
+
+/** Turn the daily mail about new submissions on or off. */
+export function useChangeDigest() {
+  const cache = useQueryClient();
+  return useMutation({
+    mutationFn: async (digest: boolean) =>
+      (await requestJson<Session>('/session', { method: 'PATCH', body: { digest } })).data,
+    onSuccess: (session) => cache.setQueryData(sessionQuery().queryKey, session),
   });
 }
 

@@ -26,12 +26,12 @@ const isWorking = (submission: Pick<Submission, 'checkState'>): boolean =>
 export const submissionQueries = {
   root,
 
-  list: (queue: 'mine' | 'review') =>
+  list: (queue: 'mine' | 'review' | 'returned') =>
     infiniteQueryOptions({
       queryKey: [...root, 'list', queue] as const,
       queryFn: ({ pageParam, signal }) =>
         getJson<SubmissionPage>('/submissions', {
-          query: { ...(queue === 'review' ? { queue } : {}), after: pageParam },
+          query: { ...(queue === 'mine' ? {} : { queue }), after: pageParam },
           signal,
         }),
       initialPageParam: '',
@@ -55,6 +55,10 @@ export const useMySubmissions = (enabled = true) => useInfiniteQuery({ ...submis
 
 /** Those to review; curators only. */
 export const useReviewQueue = (enabled = true) => useInfiniteQuery({ ...submissionQueries.list('review'), enabled });
+
+/** Those that a curator sent back and that wait for their contributors; curators only. */
+export const useReturnedSubmissions = (enabled = true) =>
+  useInfiniteQuery({ ...submissionQueries.list('returned'), enabled });
 
 /** One submission with the ETag that its changes need. */
 export const useSubmission = (id: string) => useQuery(submissionQueries.one(id));

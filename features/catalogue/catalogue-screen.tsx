@@ -125,7 +125,14 @@ function Found({ line, results, filter, order, text, sort, selected, onSort }: F
         <EmptyResult text={line.text} terms={line.asked} filter={filter} onText={line.setText} />
       ) : (
         <>
-          <ResultHead total={results.total} filter={filter} sort={order} onSort={onSort} system={system} />
+          <ResultHead
+            total={results.total}
+            upToSymmetry={results.upToSymmetry}
+            filter={filter}
+            sort={order}
+            onSort={onSort}
+            system={system}
+          />
           <ResultList
             results={results}
             systems={line.systems}

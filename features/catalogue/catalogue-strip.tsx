@@ -32,7 +32,10 @@ export function CatalogueStrip({ line, results, filter }: CatalogueStripProps) {
             kind="quiet"
             title={`Export all ${exportedWords(results.total)}`}
             label={`Export ${exportedWords(results.total)}`}
-            items={exportItems(filter)}
+            items={[
+              ...exportItems(filter),
+              { key: 'releases', label: 'Releases of the whole catalogue', href: '/releases' },
+            ]}
           />
         ) : null}
       </Strip>

@@ -10,3 +10,7 @@ export function countWords(total: OrbitPage['total']): string {
   const orbits = total.value === 1 ? '1 orbit' : `${wholeNumber(total.value)} orbits`;
   return total.relation === 'at-least' ? `more than ${orbits}` : orbits;
 }
+
+/** ", 3 up to the half-turn", where results are each other's images under a symmetry; empty where none are. */
+export const symmetryWords = (upTo: OrbitPage['upToSymmetry']): string =>
+  upTo ? `, ${wholeNumber(upTo.value)} up to the ${upTo.symmetries.join(' and the ')}` : '';

@@ -1,7 +1,7 @@
 import { View } from 'react-native';
 import { exportAddress, type ExportFormat, type OrbitFilter } from '@/features/api/orbits';
 import { completenessOf } from '@/features/catalogue/completeness-of';
-import { countWords, wholeNumber } from '@/features/catalogue/count-words';
+import { countWords, symmetryWords, wholeNumber } from '@/features/catalogue/count-words';
 import { sortChoicesFor, sortLabel } from '@/features/catalogue/sort-choices';
 import { Completeness } from '@/features/notation/completeness';
 import { CopyButton, Heading, LinkText, Menu, space, Text, useLayout } from '@/features/ui';
@@ -9,6 +9,7 @@ import type { OrbitPage, System } from '@/schemas/generated/contract';
 
 export interface ResultHeadProps {
   total: OrbitPage['total'];
+  upToSymmetry: OrbitPage['upToSymmetry'];
   filter: OrbitFilter;
   sort: string;
   onSort: (sort: string) => void;
@@ -35,12 +36,15 @@ export const exportItems = (filter: OrbitFilter) =>
   }));
 
 /** Count, sort, link and export of a result, and how complete the catalogue is. */
-export function ResultHead({ total, filter, sort, onSort, system }: ResultHeadProps) {
+export function ResultHead({ total, upToSymmetry, filter, sort, onSort, system }: ResultHeadProps) {
   const wide = useLayout() === 'wide';
   return (
     <View style={{ gap: space.half }}>
       <View style={BETWEEN}>
-        <Heading level={2}>{countWords(total)}</Heading>
+        <Heading level={2}>
+          {countWords(total)}
+          {symmetryWords(upToSymmetry)}
+        </Heading>
         <View style={INLINE}>
           <Sorting sort={sort} onSort={onSort} hasPoint={filter.near !== undefined} />
           {wide ? (
@@ -103,6 +107,10 @@ function ExportLinks({ total, filter }: Pick<ResultHeadProps, 'total' | 'filter'
           </LinkText>
         </Text>
       ))}
+      {'  ·  '}
+      <LinkText href="/releases" name="Releases of the whole catalogue">
+        Releases
+      </LinkText>
     </Text>
   );
 }

@@ -11,6 +11,7 @@ export interface Results {
   isUnknown: boolean;
   items: Entry[];
   total: OrbitPage['total'];
+  upToSymmetry: OrbitPage['upToSymmetry'];
   incipits: Record<string, number[][]>;
   distances: Record<string, number>;
   hasMore: boolean;
@@ -45,6 +46,7 @@ export function useResults(filter: OrbitFilter, accession: string | null, enable
     isUnknown: false,
     items: pages.flatMap((page) => page.items),
     total: pages[0]?.total ?? NOTHING,
+    upToSymmetry: pages[0]?.upToSymmetry ?? null,
     incipits: Object.assign({}, ...pages.map((page) => page.incipits)) as Record<string, number[][]>,
     distances: Object.assign({}, ...pages.map((page) => page.distances)) as Record<string, number>,
     hasMore: search.hasNextPage,
@@ -61,6 +63,7 @@ const EMPTY: Results = {
   isUnknown: false,
   items: [],
   total: NOTHING,
+  upToSymmetry: null,
   incipits: {},
   distances: {},
   hasMore: false,

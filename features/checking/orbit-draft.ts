@@ -14,6 +14,8 @@ export interface OrbitDraft {
   returnTimes: string;
   itinerary: string;
   tolerance: string;
+  /** Correct digits asked for. */
+  digits: string;
   note: string;
   /** Members of the body that the form has no field for; they are sent as they came. */
   rest: Record<string, unknown>;
@@ -29,6 +31,7 @@ export const emptyDraft: OrbitDraft = {
   returnTimes: '',
   itinerary: '',
   tolerance: '',
+  digits: '',
   note: '',
   rest: {},
 };
@@ -47,8 +50,8 @@ const listOf = (value: unknown): unknown[] => (Array.isArray(value) ? value : []
 
 /** The form of a body; members that have no field, and values of an unexpected kind, go to `rest`. */
 export function draftOfBody(body: DraftBody): OrbitDraft {
-  const { system, parameters, section, point, period, returns, returnTimes, itinerary, tolerance, note, ...rest } =
-    body;
+  const { system, parameters, section, point, period, returns, returnTimes, ...claims } = body;
+  const { itinerary, tolerance, digits, note, ...rest } = claims;
   const given = typeof parameters === 'object' && parameters !== null ? Object.entries(parameters) : [];
   return {
     system: textOf(system),
@@ -60,6 +63,7 @@ export function draftOfBody(body: DraftBody): OrbitDraft {
     returnTimes: listOf(returnTimes).map(textOf).join(' '),
     itinerary: textOf(itinerary),
     tolerance: textOf(tolerance),
+    digits: textOf(digits),
     note: textOf(note),
     rest: { ...rest, ...(isPlane(section) && { section }) },
   };
@@ -78,10 +82,9 @@ function sectionText(section: unknown): string {
  * @param sectionNames names of the system's sections; any other text is a formula.
  */
 export function bodyOfDraft(draft: OrbitDraft, sectionNames: readonly string[]): DraftBody {
-  const { system, section, point, period, returns, itinerary, tolerance, note, rest } = draft;
+  const { system, section, point, period, returns, itinerary, tolerance, digits, note, rest } = draft;
   const parameters = Object.fromEntries(Object.entries(draft.parameters).filter(([, value]) => value.trim() !== ''));
   const times = draft.returnTimes.split(/[\s,;]+/).filter((time) => time !== '');
-  const whole = /^[0-9]{1,9}$/.test(returns.trim());
   return {
     ...rest,
     ...(system && { system }),
@@ -90,11 +93,16 @@ export function bodyOfDraft(draft: OrbitDraft, sectionNames: readonly string[]):
     ...(point.some((coordinate) => coordinate.trim() !== '') && {
       point: point.map((coordinate) => coordinate.trim()),
     }),
-    ...(returns.trim() && { returns: whole ? parseInt(returns, 10) : returns.trim() }),
+    ...(returns.trim() && { returns: wholeNumber(returns) }),
     ...(period.trim() && { period: period.trim() }),
     ...(times.length > 0 && { returnTimes: times }),
     ...(itinerary.trim() && { itinerary: itinerary.trim() }),
     ...(tolerance.trim() && { tolerance: tolerance.trim() }),
+    ...(digits.trim() && { digits: wholeNumber(digits) }),
     ...(note.trim() && { note }),
   };
 }
+
+/** A whole number as one; anything else stays as typed, and the server says what is wrong with it. */
+const wholeNumber = (typed: string): number | string =>
+  /^[0-9]{1,9}$/.test(typed.trim()) ? parseInt(typed, 10) : typed.trim();

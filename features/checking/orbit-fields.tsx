@@ -1,10 +1,11 @@
 import { View } from 'react-native';
+import { useUser } from '@/features/api/session';
 import { formSlips } from '@/features/checking/form-slips';
 import { draftOfSystem, type OrbitDraft } from '@/features/checking/orbit-draft';
 import { SectionFields } from '@/features/checking/section-fields';
 import { SystemField } from '@/features/checking/system-field';
 import { mathName } from '@/features/notation/math-name';
-import { Field, space, TextArea, useLayout } from '@/features/ui';
+import { Field, type FieldProps, space, TextArea, useLayout } from '@/features/ui';
 import type { System } from '@/schemas/generated/contract';
 
 export interface OrbitFieldsProps {
@@ -31,7 +32,7 @@ export function OrbitFields({ systems, draft, onChange, messageAt }: OrbitFields
   const errorAt = (pointer: string): string | null => slips[pointer] ?? messageAt(pointer);
   const set = (change: Partial<OrbitDraft>) => onChange({ ...draft, ...change });
   const digits = countDigits(draft.period);
-  const field = (member: 'period' | 'returns' | 'returnTimes' | 'itinerary' | 'tolerance') => ({
+  const field = (member: 'period' | 'returns' | 'returnTimes' | 'itinerary' | 'tolerance' | 'digits') => ({
     mono: true,
     value: draft[member],
     onChangeText: (text: string) => set({ [member]: text }),
@@ -69,6 +70,7 @@ export function OrbitFields({ systems, draft, onChange, messageAt }: OrbitFields
           <Field label="Tolerance" optional {...field('tolerance')} placeholder="1e-9" />
         </View>
       </View>
+      <DigitsField {...field('digits')} />
       <TextArea
         label="Note"
         optional
@@ -78,6 +80,21 @@ export function OrbitFields({ systems, draft, onChange, messageAt }: OrbitFields
         error={errorAt('/note')}
       />
     </View>
+  );
+}
+
+/** Digits beyond those of doubles: for people with an account, and where they were asked for already. */
+function DigitsField(props: Omit<FieldProps, 'label'>) {
+  const user = useUser();
+  if (!user && props.value === '') return null;
+  return (
+    <Field
+      label="Digits wanted"
+      optional
+      {...props}
+      placeholder="15 to 100"
+      hint="More than 17 are computed with long numbers; it takes longer."
+    />
   );
 }
 

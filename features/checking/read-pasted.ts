@@ -12,6 +12,7 @@ const members = new Set(
     ' ',
   ),
 );
+const counts = new Set(['returns', 'digits']);
 /** Columns of a row without a header, in order; the point's columns stand between section and returns. */
 const LIST_COLUMN = /^(point|returnTimes)\.([1-9][0-9]*)$/;
 const PARAMETER_COLUMN = /^parameters\.(.+)$/;
@@ -57,6 +58,8 @@ function readRow(text: string): Pasted | null {
   const lists: Record<string, string[]> = {};
   const parameters: Record<string, string> = {};
   const leftOut: string[] = [];
+  // A row of an export says how many digits are known, not how many are wanted.
+  const isEntry = names.includes('accession');
   names.forEach((name, index) => {
     const value = values[index] ?? '';
     if (value === '') return;
@@ -64,7 +67,8 @@ function readRow(text: string): Pasted | null {
     const [, parameter] = PARAMETER_COLUMN.exec(name) ?? [];
     if (list && place) (lists[list] ??= [])[parseInt(place, 10) - 1] = value;
     else if (parameter) parameters[parameter] = value;
-    else if (members.has(name)) body[name] = name === 'returns' ? parseInt(value, 10) : value;
+    else if (members.has(name) && !(name === 'digits' && isEntry))
+      body[name] = counts.has(name) ? parseInt(value, 10) : value;
     else leftOut.push(name);
   });
   return { body: { ...body, ...lists, ...(Object.keys(parameters).length > 0 && { parameters }) }, leftOut };

@@ -9,44 +9,63 @@ const NEAR_TANGENT = 1e-3;
 /** Significant digits of a cosine. */
 const COSINE_DIGITS = 4;
 
+export interface ReportFiguresProps {
+  report: CheckReport;
+  muted?: boolean;
+  /** In two columns where there is room. */
+  columns?: boolean;
+}
+
 /** The figures of a report, always in this order, with their limits. */
-export function ReportFigures({ report, muted = false }: { report: CheckReport; muted?: boolean }) {
+export function ReportFigures({ report, columns = false, ...look }: ReportFiguresProps) {
+  return columns ? (
+    <div className="r-columns">
+      <Rows report={report} {...look} compact />
+    </div>
+  ) : (
+    <View>
+      <Rows report={report} {...look} />
+    </View>
+  );
+}
+
+function Rows({ report, ...look }: { report: CheckReport; muted?: boolean; compact?: boolean }) {
   const { closure, correction, digits } = report;
   const orbit = closedOrbit(report);
   const limit = closure?.tolerance ?? 0;
   const against = (value: number) => ({ value, relation: value <= limit ? ('≤' as const) : ('>' as const), limit });
   const [largest] = orbit?.multipliers ?? [];
   return (
-    <View>
-      {closure ? <FigureRow name="Closure as typed" muted={muted} {...against(closure.relative)} /> : null}
+    <>
+      {closure ? <FigureRow name="Closure as typed" {...look} {...against(closure.relative)} /> : null}
       {correction ? (
         <>
-          <FigureRow name="Correction moves the point by" muted={muted} {...against(correction.shift)} />
-          <FigureRow name="… and the period by" muted={muted} {...against(correction.periodShift)} />
-          <FigureRow name="Closure after correction" muted={muted} value={correction.residual} />
+          <FigureRow name="Correction moves the point by" {...look} {...against(correction.shift)} />
+          <FigureRow name="… and the period by" {...look} {...against(correction.periodShift)} />
+          <FigureRow name="Closure after correction" {...look} value={correction.residual} />
         </>
       ) : null}
       {orbit ? (
         <>
           <FigureRow
             name="Returns counted; prime"
-            muted={muted}
+            {...look}
             value={`${orbit.returns}; ${orbit.prime ? 'yes' : 'no'}`}
           />
           <FigureRow
             name="Transversality, smallest"
-            muted={muted}
+            {...look}
             value={orbit.smallestTransversality.toPrecision(COSINE_DIGITS)}
             relation={orbit.smallestTransversality >= NEAR_TANGENT ? '≥' : '<'}
             limit={NEAR_TANGENT}
           />
-          {largest ? <FigureRow name="Largest multiplier" muted={muted} value={formatMultiplierSize(largest)} /> : null}
-          <FigureRow name="Stability" muted={muted} value={orbit.stability} />
+          {largest ? <FigureRow name="Largest multiplier" {...look} value={formatMultiplierSize(largest)} /> : null}
+          <FigureRow name="Stability" {...look} value={orbit.stability} />
         </>
       ) : null}
       {digits ? (
-        <FigureRow name="Digits typed; confirmed" muted={muted} value={`${digits.typed}; ${digits.confirmed}`} />
+        <FigureRow name="Digits typed; confirmed" {...look} value={`${digits.typed}; ${digits.confirmed}`} />
       ) : null}
-    </View>
+    </>
   );
 }

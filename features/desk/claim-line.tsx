@@ -2,23 +2,23 @@ import { useState } from 'react';
 import { View } from 'react-native';
 import { useClaimSubmission, useReleaseSubmission } from '@/features/api/submissions';
 import { RefusedFields } from '@/features/checking/refused-fields';
-import { Button, Sheet, space, Text, TextButton } from '@/features/ui';
+import { clockTime } from '@/features/desk/time-words';
+import { Button, Sheet, space, Text, TextButton, useLayout } from '@/features/ui';
 import type { Submission } from '@/schemas/generated/contract';
 
-const clock = (at: string): string => new Date(at).toLocaleTimeString('en-GB', { hour: '2-digit', minute: '2-digit' });
-
-/** Who holds a submission, until when; claim, release, take over. */
+/** Who holds a submission, until when, in few words on a phone; claim, release, take over. */
 export function ClaimLine({ submission }: { submission: Submission }) {
+  const phone = useLayout() === 'phone';
   const claim = useClaimSubmission();
   const release = useReleaseSubmission();
   const [isAsking, setAsking] = useState(false);
-  const { id } = submission;
-  const held = submission.claim;
+  const { id, claim: held } = submission;
   return (
-    <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', gap: space.one }}>
+    <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', gap: space.half }}>
       {held ? (
-        <Text size={14} tone="muted">
-          claimed by {held.byMe ? 'you' : held.by} until {clock(held.until)}
+        <Text tone="muted">
+          {phone ? (held.byMe ? 'yours' : held.by) : `claimed by ${held.byMe ? 'you' : held.by}`} until{' '}
+          {clockTime(held.until)} ·
         </Text>
       ) : null}
       {held === null ? (

@@ -1,8 +1,13 @@
 import { View } from 'react-native';
 import { hasRole, useSession } from '@/features/api/session';
-import { useMySubmissions, useReviewQueue } from '@/features/api/submissions';
+import { useMySubmissions } from '@/features/api/submissions';
+import { QueueList } from '@/features/desk/queue-list';
+import { queueWords } from '@/features/desk/queue-words';
+import { ROOM_FOR_QUEUE } from '@/features/desk/room-for-queue';
 import { SubmissionList } from '@/features/desk/submission-list';
-import { Button, Page, PageSkeleton, space, Text, useLayout } from '@/features/ui';
+import { useNow } from '@/features/desk/use-now';
+import { useQueue } from '@/features/desk/use-queue';
+import { Button, Page, PageSkeleton, space, Text, useContainerWidth } from '@/features/ui';
 
 const TITLE = 'Desk';
 
@@ -27,33 +32,38 @@ export function DeskScreen() {
 }
 
 function Lists({ isCurator }: { isCurator: boolean }) {
-  const wide = useLayout() === 'wide';
   const mine = useMySubmissions();
-  const queue = useReviewQueue(isCurator);
-  const half = { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 } as const;
+  const hasColumn = useContainerWidth() >= ROOM_FOR_QUEUE;
+  const showsQueue = isCurator && !hasColumn;
   return (
     <Page
-      title={TITLE}
+      title={showsQueue ? 'Queue' : 'Desk'}
+      {...(showsQueue && { subtitle: <QueueLine /> })}
       actions={
-        <Button href="/bench" filled>
+        <Button href="/bench" filled={!showsQueue}>
           Check an orbit
         </Button>
       }
     >
-      <View style={{ flexDirection: wide ? 'row' : 'column', gap: space.six }}>
-        {isCurator ? (
-          <View style={wide ? half : null}>
-            <SubmissionList title="Queue" list={queue} empty="Nothing waits for a curator." />
-          </View>
-        ) : null}
-        <View style={wide ? half : null}>
-          <SubmissionList
-            title="My submissions"
-            list={mine}
-            empty="You have sent nothing yet. Check an orbit on the Bench; it becomes a draft here in one step."
-          />
-        </View>
+      <View style={{ gap: space.six }}>
+        {showsQueue ? <Queue /> : null}
+        <SubmissionList
+          title="My submissions"
+          list={mine}
+          empty="You have sent nothing yet. Check an orbit on the Bench; it becomes a draft here in one step."
+        />
       </View>
     </Page>
   );
+}
+
+function Queue() {
+  return <QueueList queue={useQueue(true)} />;
+}
+
+/** How many wait, and since when. */
+function QueueLine() {
+  const { review, waiting } = useQueue(true);
+  const now = useNow();
+  return <Text tone="muted">{queueWords(review.data?.pages[0]?.total, waiting[0], now)}</Text>;
 }

@@ -3,15 +3,23 @@ import { View } from 'react-native';
 import { Discussion } from '@/features/desk/discussion';
 import { History } from '@/features/desk/history';
 import { changedMembers, memberText } from '@/features/desk/changed-members';
+import { ReviewProjection, ReviewSection } from '@/features/desk/review-figures';
 import { DataTable, DefinitionRows, space, Tabs, Text } from '@/features/ui';
-import type { Submission } from '@/schemas/generated/contract';
+import type { Submission, System } from '@/schemas/generated/contract';
 
-type Key = 'typed' | 'changes' | 'discussion' | 'history';
+type Key = 'section' | 'projection' | 'typed' | 'changes' | 'discussion' | 'history';
 
-/** Numbers as typed, changes since the revision before, discussion, history. */
-export function ReviewTabs({ submission }: { submission: Submission }) {
-  const [active, setActive] = useState<Key>('typed');
+interface ReviewTabsProps {
+  submission: Submission;
+  system: System | undefined;
+}
+
+/** On the section, projection, numbers as typed, changes since the revision before, discussion, history. */
+export function ReviewTabs({ submission, system }: ReviewTabsProps) {
+  const [active, setActive] = useState<Key>('section');
   const tabs = [
+    { key: 'section' as const, label: 'On the section' },
+    { key: 'projection' as const, label: 'Projection' },
     { key: 'typed' as const, label: 'Numbers as typed' },
     ...(submission.revision > 1
       ? [{ key: 'changes' as const, label: `Changes since revision ${submission.revision - 1}` }]
@@ -22,6 +30,8 @@ export function ReviewTabs({ submission }: { submission: Submission }) {
   return (
     <Tabs name="More about this submission" tabs={tabs} active={active} onChange={setActive}>
       <View style={{ paddingTop: space.two }}>
+        {active === 'section' ? <ReviewSection submission={submission} system={system} /> : null}
+        {active === 'projection' ? <ReviewProjection submission={submission} system={system} /> : null}
         {active === 'typed' ? <AsTyped submission={submission} /> : null}
         {active === 'changes' ? <Changes submission={submission} /> : null}
         {active === 'discussion' ? <Discussion submission={submission} /> : null}

@@ -3,19 +3,25 @@ import { useSystem } from '@/features/api/systems';
 import { reportMusic } from '@/features/checking/report-music';
 import { draftOfBody } from '@/features/checking/orbit-draft';
 import { checkWords } from '@/features/desk/check-words';
-import { orbitState } from '@/features/notation/orbit-state';
+import { orbitState, stateLook } from '@/features/notation/orbit-state';
 import { Incipit } from '@/features/notation/incipit';
 import { StateWord } from '@/features/notation/state-word';
 import { colour, LinkText, space, Text } from '@/features/ui';
 import type { SubmissionSummary } from '@/schemas/generated/contract';
 
-/** One submission in a list: number, both states, incipit, what it waits for. */
+/** One of one's own submissions in a list: number, both states, incipit, what it waits for. */
 export function SubmissionItem({ submission }: { submission: SubmissionSummary }) {
-  const { id, number, report, body, owner, isMine, claim, blocked } = submission;
+  const { id, number, report, body, claim, blocked } = submission;
   const draft = draftOfBody(body);
   const system = useSystem(draft.system, draft.system !== '');
   const state = orbitState(submission.reviewState, submission.checkState, submission.verdict);
   const music = report ? reportMusic({ report, system: system.data, section: draft.section, state }) : null;
+  const checked = checkWords(submission);
+  const waits = [
+    ...(checked === stateLook[state].word ? [] : [checked]),
+    ...(blocked ? ['a finding blocks it'] : []),
+    ...(claim ? [`claimed by ${claim.by}`] : []),
+  ];
   return (
     <View
       role="listitem"
@@ -40,10 +46,7 @@ export function SubmissionItem({ submission }: { submission: SubmissionSummary }
           ) : null}
         </Text>
         <Text size={14} tone="muted">
-          {checkWords(submission)}
-          {blocked ? ' · a finding blocks it' : ''}
-          {claim ? ` · claimed by ${claim.byMe ? 'you' : claim.by}` : ''}
-          {isMine ? '' : ` · from ${owner.name}`}
+          {waits.join(' · ')}
         </Text>
       </View>
     </View>

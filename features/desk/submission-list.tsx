@@ -12,20 +12,23 @@ interface Props {
   empty: string;
 }
 
+/** Longer staves would be harder to compare, px. */
+const WIDEST = 832;
+
 type Turn = SubmissionSummary['turn'];
 
 /** Whose turn it is, in the order that matters; those without a turn are decided. */
 const groups: readonly { turn: Turn; title: string }[] = [
+  { turn: 'contributor', title: 'Your turn' },
   { turn: 'curator', title: 'A curator’s turn' },
-  { turn: 'contributor', title: 'The contributor’s turn' },
   { turn: 'machine', title: 'The machine’s turn' },
   { turn: null, title: 'Decided' },
 ];
 
-/** Submissions by whose turn it is. */
+/** One's own submissions by whose turn it is. */
 export function SubmissionList({ title, list, empty }: Props) {
   return (
-    <View style={{ gap: space.two }}>
+    <View style={{ gap: space.two, maxWidth: WIDEST }}>
       <Heading level={2}>{title}</Heading>
       <Body list={list} empty={empty} />
     </View>

@@ -1,6 +1,7 @@
 import { router, usePathname } from 'expo-router';
 import { View } from 'react-native';
 import { hasRole, useSession, useSignOut } from '@/features/api/session';
+import { DigestSwitch } from '@/features/frame/digest-switch';
 import { initialsOf } from '@/features/frame/initials-of';
 import { followLink, LinkText, Popover, space, Text, ThemeSwitch, useLayout } from '@/features/ui';
 import type { User } from '@/schemas/generated/contract';
@@ -64,6 +65,7 @@ function AccountItems({ user, close, hideName, onSignOut }: AccountItemsProps) {
         <span>Theme</span>
         <ThemeSwitch />
       </div>
+      <DigestSwitch />
       {hasRole(user, 'administrator') ? (
         <Item href="/administration/users" label="Administration" detail="accounts and roles" close={close} />
       ) : null}

@@ -3,6 +3,7 @@ import type { ReactNode } from 'react';
 import { useSession } from '@/features/api/session';
 import { AccountMenu } from '@/features/frame/account-menu';
 import { KeyHelp } from '@/features/frame/key-help';
+import { PageBoundary } from '@/features/frame/page-boundary';
 import { placesFor } from '@/features/frame/places-for';
 import { usePlaceKeys } from '@/features/frame/use-place-keys';
 import { useScrollMemory } from '@/features/frame/use-scroll-memory';
@@ -42,7 +43,9 @@ export function PageFrame({ children }: { children: ReactNode }) {
         />
       )}
       {phone ? <PlacesBar places={places} /> : null}
-      <Main>{children}</Main>
+      <Main>
+        <PageBoundary path={path}>{children}</PageBoundary>
+      </Main>
       <KeyHelp />
       <LiveRegion />
     </>

@@ -3,7 +3,6 @@ import { Digits } from '@/features/notation/digits';
 import { FigureRow } from '@/features/notation/figure-row';
 import { FindingRow } from '@/features/notation/finding-row';
 import { formatMultiplierSize } from '@/features/notation/format-multiplier';
-import { formatSize } from '@/features/notation/format-size';
 import { Magnitude, type Relation } from '@/features/notation/magnitude';
 import { CopyButton, Heading, Labelled, Text } from '@/features/ui';
 import type { Entry } from '@/schemas/generated/contract';
@@ -33,47 +32,6 @@ export function ClosureField({ entry }: { entry: Entry }) {
       </Text>
     </Labelled>
   );
-}
-
-/** How the entry is known, in a sentence or two. */
-export function HowKnown({ entry }: { entry: Entry }) {
-  return (
-    <View>
-      <Heading level={2}>How it is known</Heading>
-      <Text>
-        <Evidence entry={entry} />
-        {entry.verdict === 'closes-after-correction'
-          ? ' An orbit lies within the tolerance of what was typed; its instability spreads the typed digits further.'
-          : ''}
-      </Text>
-    </View>
-  );
-}
-
-function Evidence({ entry }: { entry: Entry }) {
-  const { level, digits } = entry.evidence;
-  const size = <Text mono>{formatSize(entry.closure.absolute)}</Text>;
-  switch (level) {
-    case 're-integrated':
-      return (
-        <>
-          <Text weight="semibold">Re-integrated.</Text> Closes to {size} here; {digits} digits confirmed.
-        </>
-      );
-    case 'refined':
-      return (
-        <>
-          <Text weight="semibold">Refined</Text> to {digits} digits.
-        </>
-      );
-    case 'proved':
-      return (
-        <>
-          <Text weight="semibold">Proved.</Text> Exactly one orbit closes near these crossings. Digits refined to{' '}
-          {digits}; later ones as submitted.
-        </>
-      );
-  }
 }
 
 /** The figures of the check, each against its limit, and what it found. */

@@ -1,3 +1,4 @@
+import { useMemo } from 'react';
 import { View } from 'react-native';
 import type { UseQueryResult } from '@tanstack/react-query';
 import { failureWords } from '@/features/api/failure-words';
@@ -7,6 +8,8 @@ import { mathName } from '@/features/notation/math-name';
 import { MultipliersFigure } from '@/features/plot/multipliers-figure';
 import { type PlaneLevel, planeLevel } from '@/features/plot/plane-level';
 import { ProjectionFigure } from '@/features/plot/projection-figure';
+import { sectionAxes } from '@/features/plot/section-axes';
+import { sectionField } from '@/features/plot/section-field';
 import { SectionFigure } from '@/features/plot/section-figure';
 import { TimeFigure } from '@/features/plot/time-figure';
 import { space, StaffLines, Text, TextButton, useLayout } from '@/features/ui';
@@ -61,6 +64,7 @@ type TracedProps = Omit<OrbitFiguresProps, 'trace'> & { trace: Trace; fileName: 
 function TracedFigures({ entry, system, trace, selected, onSelect, fileName }: TracedProps) {
   const section = planeLevel(entry.section.formula, trace.variables);
   const shared = { trace, selected, onSelect };
+  const field = useMemo(() => (system ? sectionField(system, entry.section, entry.parameters) : null), [system, entry]);
   const isOne = entry.crossings.length === 1;
   const count = countWord(entry.crossings.length);
   const noun = isOne ? 'crossing' : 'crossings';
@@ -79,12 +83,14 @@ function TracedFigures({ entry, system, trace, selected, onSelect, fileName }: T
       />
       <SectionFigure
         {...shared}
-        names={sectionAxes(trace, section)}
+        names={sectionAxes(trace.variables, section)}
+        {...(field && { sign: field.sign })}
         title={<SectionTitle section={section} />}
         caption={
-          isOne
+          (isOne
             ? 'The one crossing; there the flow rises through the section.'
-            : `The ${count} crossings, numbered in order of time; at each the flow rises through the section.`
+            : `The ${count} crossings, numbered in order of time; at each the flow rises through the section.`) +
+          (field ? ' Dashed, where it comes near: the line of tangency.' : '')
         }
         fileName={fileName('section')}
       />
@@ -114,11 +120,4 @@ function projectionAxes({ variables }: Trace, section: PlaneLevel | null, drawn:
   if (!section || section.variable === drawn || !variables.includes(drawn)) return [first, last];
   const [a, b] = [variables.indexOf(drawn), variables.indexOf(section.variable)];
   return a < b ? [drawn, section.variable] : [section.variable, drawn];
-}
-
-/** The first two coordinates that vary on the section; in the plane, both. */
-function sectionAxes({ variables }: Trace, section: PlaneLevel | null): [string, string] {
-  const free = variables.filter((name) => name !== section?.variable);
-  const [a, b] = free.length > 1 ? free : variables;
-  return [a ?? '', b ?? a ?? ''];
 }

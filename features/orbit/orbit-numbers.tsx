@@ -14,7 +14,11 @@ const FIRST_SHOWN = 32;
 /** Significant digits of a cosine. */
 const COSINE_DIGITS = 4;
 
+/** Every digit of a refined number was computed here; of others as many as the check confirmed. */
+const verifiedIn = ({ evidence: { level, digits } }: Entry): number => (level === 'refined' ? Infinity : digits);
+
 export function PeriodField({ entry }: { entry: Entry }) {
+  const [all, setAll] = useState(false);
   return (
     <Labelled
       label={
@@ -25,11 +29,11 @@ export function PeriodField({ entry }: { entry: Entry }) {
       action={<CopyButton text={entry.period} what="period" />}
     >
       <Text>
-        <Digits value={entry.period} verified={entry.evidence.digits} />
+        <Digits value={entry.period} verified={verifiedIn(entry)} {...(all && { max: Infinity })} />
       </Text>
-      <DigitsLeftOut value={entry.period} />
+      <DigitsLeftOut value={entry.period} all={all} onChange={setAll} what="period" />
       <Text size={13} tone="muted">
-        Underlined: verified here. Paler: as submitted.
+        Underlined: verified here.{entry.evidence.level === 'refined' ? '' : ' Paler: as submitted.'}
       </Text>
     </Labelled>
   );
@@ -39,6 +43,9 @@ export function PeriodField({ entry }: { entry: Entry }) {
 export function PointField({ entry, system }: { entry: Entry; system: System | undefined }) {
   const variables = system?.document.variables.map(({ name }) => name) ?? [];
   const fixed = planeLevel(entry.section.formula, variables)?.variable;
+  const [all, setAll] = useState(false);
+  const most = all ? { max: Infinity } : {};
+  const longest = entry.point.reduce((one, other) => (other.length > one.length ? other : one), '');
   return (
     <Labelled
       label="Point on the section"
@@ -52,19 +59,24 @@ export function PointField({ entry, system }: { entry: Entry; system: System | u
           <View style={{ flexShrink: 1, minWidth: 0 }}>
             {variables[index] === fixed ? (
               <Text>
-                <Digits value={value} />{' '}
+                <Digits value={value} {...most} />{' '}
                 <Text size={14} tone="muted">
                   fixed by the section
                 </Text>
               </Text>
             ) : (
               <Text>
-                <Digits value={value} verified={verifiedDigits(value, entry.extent[index], entry.evidence.digits)} />
+                <Digits
+                  value={value}
+                  verified={verifiedDigits(value, entry.extent[index], verifiedIn(entry))}
+                  {...most}
+                />
               </Text>
             )}
           </View>
         </View>
       ))}
+      <DigitsLeftOut value={longest} all={all} onChange={setAll} what="point" />
     </Labelled>
   );
 }
@@ -103,7 +115,7 @@ export function ReturnTimes({ entry, selected, onSelect }: ReturnTimesProps) {
           key: String(index),
           cells: {
             number: index + 1,
-            time: <Digits value={time} verified={entry.evidence.digits} />,
+            time: <Digits value={time} verified={verifiedIn(entry)} />,
             cosine: (cosines[index] ?? 0).toPrecision(COSINE_DIGITS),
           },
         }))}

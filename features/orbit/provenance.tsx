@@ -1,7 +1,7 @@
 import { View } from 'react-native';
-import { useOrbitRevisions } from '@/features/api/orbits';
+import { useCitationLine, useOrbitRevisions } from '@/features/api/orbits';
 import { longDate } from '@/features/notation/long-date';
-import { DefinitionRows, Heading, LinkText, Text } from '@/features/ui';
+import { CopyButton, DefinitionRows, Heading, LinkText, space, Text } from '@/features/ui';
 import type { Entry } from '@/schemas/generated/contract';
 
 /** Who contributed and accepted the entry, and when; how it was checked; its revisions. */
@@ -16,14 +16,24 @@ export function Provenance({ entry }: { entry: Entry }) {
       name: entry.revision === 1 ? 'Revision' : 'Revisions',
       value: (
         <View>
-          {(revisions.data?.items ?? []).map(({ revision, at, why }) => (
-            <Text key={`${revision} ${at}`}>{`${revision}, ${longDate(at)}: ${why}`}</Text>
+          {(revisions.data?.items ?? []).map(({ revision, at, why, links }) => (
+            <Text key={revision}>
+              {revision === entry.revision ? (
+                String(revision)
+              ) : (
+                <LinkText href={links.self} name={`Revision ${revision} as JSON`}>
+                  {String(revision)}
+                </LinkText>
+              )}
+              {`, ${longDate(at)}: ${why}`}
+            </Text>
           ))}
           {revisions.data ? null : <Text>{String(entry.revision)}</Text>}
         </View>
       ),
     },
     { name: 'Licence', value: entry.licence },
+    { name: 'Cite as', value: <CiteLine accession={entry.accession} /> },
   ];
   return (
     <View>
@@ -39,6 +49,21 @@ function Person({ person, at }: { person: Entry['contributor']; at: string }) {
       {person.orcid ? <LinkText href={`https://orcid.org/${person.orcid}`}>{person.name}</LinkText> : person.name},{' '}
       {longDate(at)}
     </Text>
+  );
+}
+
+/** The line to cite the entry by; *Cite* has it in the forms that programs read. */
+function CiteLine({ accession }: { accession: string }) {
+  const citation = useCitationLine(accession);
+  if (citation.isError) return <Text tone="muted">The line did not come; Cite asks again.</Text>;
+  const sentence = citation.data ?? '…';
+  return (
+    <View style={{ gap: space.half, alignItems: 'flex-start' }}>
+      <Text style={{ overflowWrap: 'anywhere' } as object}>{sentence}</Text>
+      <CopyButton text={sentence} what="citation" said="Copied">
+        Copy
+      </CopyButton>
+    </View>
   );
 }
 

@@ -1,7 +1,8 @@
+import { G, Path } from 'react-native-svg';
 import { colour } from '@/features/ui';
 import { noteheadPath } from '@/features/notation/notehead-path';
-import { SvgLabel } from '@/features/notation/svg-label';
 import { placeLabels } from './place-labels';
+import { PlotLabel } from './plot-label';
 
 export interface CrossingMarksProps {
   /** px, in order of time, the start first. */
@@ -30,22 +31,22 @@ export function CrossingMarks({ marks, selected = null, width, height, numbered 
     chosen !== undefined && mark !== undefined && Math.hypot(mark.x - chosen.x, mark.y - chosen.y) < NEAR;
   const shown = labels.filter(({ index }) => !isNearChosen(marks[index]));
   return (
-    <g>
-      <path
+    <G>
+      <Path
         d={marks.map(({ x, y }) => noteheadPath(x, y, size)).join('')}
         fill={colour.ink}
         stroke={colour.page}
         strokeWidth={1}
       />
       {shown.map(({ index, text, x, y }) => (
-        <SvgLabel key={index} x={x} y={y} anchor="middle" paint={colour.ink} halo={colour.page}>
+        <PlotLabel key={index} x={x} y={y} anchor="middle" paint={colour.ink} halo={colour.page}>
           {text}
-        </SvgLabel>
+        </PlotLabel>
       ))}
       {chosen && selected !== null ? (
-        <g>
-          <path d={noteheadPath(chosen.x, chosen.y, RING)} fill="none" stroke={colour.indigo} strokeWidth={2} />
-          <SvgLabel
+        <G>
+          <Path d={noteheadPath(chosen.x, chosen.y, RING)} fill="none" stroke={colour.indigo} strokeWidth={2} />
+          <PlotLabel
             x={chosen.x + 15}
             y={chosen.y - 12}
             anchor="middle"
@@ -54,9 +55,9 @@ export function CrossingMarks({ marks, selected = null, width, height, numbered 
             halo={colour.page}
           >
             {selected + 1}
-          </SvgLabel>
-        </g>
+          </PlotLabel>
+        </G>
       ) : null}
-    </g>
+    </G>
   );
 }

@@ -1,4 +1,4 @@
-import { type ReactNode, useId, useRef, useState } from 'react';
+import { type ReactNode, Suspense, useId, useRef, useState } from 'react';
 import { View } from 'react-native';
 import {
   CopyButton,
@@ -7,6 +7,7 @@ import {
   DataTable,
   Heading,
   space,
+  StaffLines,
   Text,
   TextButton,
   useAnnounce,
@@ -143,7 +144,11 @@ export function Figure(props: FigureProps) {
           {width && asTable ? (
             <TableShown {...{ name, table, height, selected }} {...(onSelect && { onSelect })} />
           ) : null}
-          {width && !asTable ? <div ref={box}>{children({ width, height })}</div> : null}
+          {width && !asTable ? (
+            <div ref={box}>
+              <Suspense fallback={<StaffLines kind="loading" />}>{children({ width, height })}</Suspense>
+            </div>
+          ) : null}
         </View>
         <figcaption>
           <Text size={14} tone="muted">

@@ -1,4 +1,4 @@
-import type { PlanePoint } from './section-plot';
+import type { PlanePoint } from './plane-point';
 
 /** A rectangle of the plane. */
 export interface PlaneBox {

@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import type { Multiplier } from '@/features/notation/format-multiplier';
 import { Figure } from './figure';
 import { multiplierText } from './multiplier-text';
-import { UnitCircle } from './unit-circle';
+import { UnitCircle } from './lazy-pictures';
 
 export interface MultipliersFigureProps {
   multipliers: readonly Multiplier[];

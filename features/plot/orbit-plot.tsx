@@ -1,11 +1,12 @@
+import { G, Path } from 'react-native-svg';
 import { countWord } from '@/features/notation/count-word';
-import { SvgLabel } from '@/features/notation/svg-label';
 import { colour, series } from '@/features/ui';
 import { mathName } from '@/features/notation/math-name';
 import type { Trace } from '@/schemas/generated/contract';
 import { CrossingMarks } from './crossing-marks';
 import { extremeText } from './extreme-text';
 import { type PlotFrame, plotFrame } from './plot-frame';
+import { PlotLabel } from './plot-label';
 import { PlotPicture } from './plot-picture';
 import { polylinePath } from './polyline-path';
 import { RangeFrame } from './range-frame';
@@ -67,22 +68,22 @@ function SectionLine({
   const stroke = { stroke: series[2], strokeWidth: 1.4, strokeDasharray: '6 4' };
   if (variable === drawn[1]) {
     return (
-      <g>
-        <path d={`M${left} ${y(level)}H${right}`} {...stroke} />
-        <SvgLabel x={left - 22} y={y(level) + 21} face="reading" size={13} anchor="end" paint={series[2]}>
+      <G>
+        <Path d={`M${left} ${y(level)}H${right}`} {...stroke} />
+        <PlotLabel x={left - 22} y={y(level) + 21} face="reading" size={13} anchor="end" paint={series[2]}>
           section
-        </SvgLabel>
-      </g>
+        </PlotLabel>
+      </G>
     );
   }
   if (variable !== drawn[0]) return null;
   return (
-    <g>
-      <path d={`M${x(level)} ${top}V${bottom}`} {...stroke} />
-      <SvgLabel x={x(level)} y={top - 8} face="reading" size={13} anchor="middle" paint={series[2]} halo={colour.page}>
+    <G>
+      <Path d={`M${x(level)} ${top}V${bottom}`} {...stroke} />
+      <PlotLabel x={x(level)} y={top - 8} face="reading" size={13} anchor="middle" paint={series[2]} halo={colour.page}>
         section
-      </SvgLabel>
-    </g>
+      </PlotLabel>
+    </G>
   );
 }
 
@@ -97,13 +98,13 @@ function Triad({ turn, names, height }: { turn: Turn; names: readonly [string, s
   ).map((unit) => seenFrom(turn, unit));
   const [x, y, length] = [44, height - 40, 26];
   return (
-    <g>
-      <path
+    <G>
+      <Path
         d={ends.map((e) => `M${x} ${y}L${x + e[0] * length} ${y - e[1] * length}`).join('')}
         stroke={colour.staff}
       />
       {ends.map((e, i) => (
-        <SvgLabel
+        <PlotLabel
           key={i}
           x={x + e[0] * (length + 10)}
           y={y - e[1] * (length + 10) + 5}
@@ -113,9 +114,9 @@ function Triad({ turn, names, height }: { turn: Turn; names: readonly [string, s
           anchor="middle"
         >
           {names[i]}
-        </SvgLabel>
+        </PlotLabel>
       ))}
-    </g>
+    </G>
   );
 }
 
@@ -168,8 +169,8 @@ export function OrbitPlot(props: OrbitPlotProps) {
           yTicks={section && section.variable === drawn[1] ? [section.level] : [0]}
         />
       )}
-      <path d={polylinePath(points)} fill="none" stroke={series[0]} strokeWidth={LINE} strokeLinejoin="round" />
-      <path d={arrowPath(points)} fill={series[0]} />
+      <Path d={polylinePath(points)} fill="none" stroke={series[0]} strokeWidth={LINE} strokeLinejoin="round" />
+      <Path d={arrowPath(points)} fill={series[0]} />
       {isTurned ? null : <SectionLine frame={frame} section={section} drawn={drawn} />}
       <CrossingMarks {...{ marks, selected, width, height }} />
     </PlotPicture>

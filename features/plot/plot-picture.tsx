@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import { View } from 'react-native';
+import { Svg } from 'react-native-svg';
 import { CrossingWalk } from '@/features/notation/crossing-walk';
 import { pressedCrossing } from './pressed-crossing';
 
@@ -20,9 +21,9 @@ export interface PlotPictureProps {
 export function PlotPicture(props: PlotPictureProps) {
   const { width, height, words, marks, selected = null, onSelect, valueText, children } = props;
   const picture = (
-    <svg width={width} height={height} aria-hidden>
+    <Svg width={width} height={height} aria-hidden>
       {children}
-    </svg>
+    </Svg>
   );
   if (!onSelect || marks.length === 0) {
     return (

@@ -5,7 +5,7 @@ import { Select, space, Text } from '@/features/ui';
 import type { Trace } from '@/schemas/generated/contract';
 import { crossingTable } from './crossing-table';
 import { Figure } from './figure';
-import { OrbitPlot } from './orbit-plot';
+import { OrbitPlot } from './lazy-pictures';
 import type { PlaneLevel } from './plane-level';
 import { traceCrossings } from './trace-crossings';
 import { TurnByDrag } from './turn-by-drag';

@@ -1,7 +1,8 @@
+import { G, Path } from 'react-native-svg';
 import { colour } from '@/features/ui';
-import { SvgLabel } from '@/features/notation/svg-label';
 import { extremeText } from './extreme-text';
 import type { PlotFrame } from './plot-frame';
+import { PlotLabel } from './plot-label';
 
 export interface RangeFrameProps {
   frame: PlotFrame;
@@ -13,7 +14,7 @@ export interface RangeFrameProps {
 }
 
 /** px between the data and their axis. */
-const OFFSET = 12;
+export const AXIS_OFFSET = 12;
 const TICK = 6;
 /** Ticks closer to an end than this are left out. */
 const CLOSE = 16;
@@ -31,57 +32,57 @@ function inside(
 
 function YAxis({ frame, yName, yTicks = [] }: RangeFrameProps) {
   const { left, top, bottom, y, yRange, axisShift } = frame;
-  const axis = left - OFFSET - (axisShift?.x ?? 0);
+  const axis = left - AXIS_OFFSET - (axisShift?.x ?? 0);
   const ticks = inside(yTicks, y, [top, bottom], CLOSE);
   const marks = ticks.map((tick) => `M${axis - TICK} ${y(tick)}H${axis}`).join('');
   return (
-    <g>
-      <path d={`M${axis - TICK} ${top}H${axis}V${bottom}H${axis - TICK}${marks}`} stroke={colour.staff} fill="none" />
+    <G>
+      <Path d={`M${axis - TICK} ${top}H${axis}V${bottom}H${axis - TICK}${marks}`} stroke={colour.staff} fill="none" />
       {[yRange[1], ...ticks, yRange[0]].map((value, i) => (
-        <SvgLabel key={i} x={axis - TICK - 4} y={y(value) + 4.5} anchor="end">
+        <PlotLabel key={i} x={axis - TICK - 4} y={y(value) + 4.5} anchor="end">
           {extremeText(value)}
-        </SvgLabel>
+        </PlotLabel>
       ))}
-      <SvgLabel x={axis} y={top - 10} size={16} face="readingItalic" paint={colour.ink} anchor="middle">
+      <PlotLabel x={axis} y={top - 10} size={16} face="readingItalic" paint={colour.ink} anchor="middle">
         {yName}
-      </SvgLabel>
-    </g>
+      </PlotLabel>
+    </G>
   );
 }
 
 function XAxis({ frame, xName, xTicks = [] }: RangeFrameProps) {
   const { left, right, bottom, x, xRange, axisShift } = frame;
-  const axis = bottom + OFFSET + (axisShift?.y ?? 0);
+  const axis = bottom + AXIS_OFFSET + (axisShift?.y ?? 0);
   const ticks = inside(xTicks, x, [left, right], CLOSE_X);
   const marks = ticks.map((tick) => `M${x(tick)} ${axis}V${axis + TICK}`).join('');
   const narrow = right - left < 90;
   return (
-    <g>
-      <path d={`M${left} ${axis + TICK}V${axis}H${right}V${axis + TICK}${marks}`} stroke={colour.staff} fill="none" />
-      <SvgLabel x={left} y={axis + TICK + 14} anchor={narrow ? 'end' : 'middle'}>
+    <G>
+      <Path d={`M${left} ${axis + TICK}V${axis}H${right}V${axis + TICK}${marks}`} stroke={colour.staff} fill="none" />
+      <PlotLabel x={left} y={axis + TICK + 14} anchor={narrow ? 'end' : 'middle'}>
         {extremeText(xRange[0])}
-      </SvgLabel>
+      </PlotLabel>
       {ticks.map((value) => (
-        <SvgLabel key={value} x={x(value)} y={axis + TICK + 14} anchor="middle">
+        <PlotLabel key={value} x={x(value)} y={axis + TICK + 14} anchor="middle">
           {extremeText(value)}
-        </SvgLabel>
+        </PlotLabel>
       ))}
-      <SvgLabel x={right} y={axis + TICK + 14} anchor={narrow ? 'start' : 'middle'}>
+      <PlotLabel x={right} y={axis + TICK + 14} anchor={narrow ? 'start' : 'middle'}>
         {extremeText(xRange[1])}
-      </SvgLabel>
-      <SvgLabel x={right + 18} y={axis + 5} size={16} face="readingItalic" paint={colour.ink} anchor="middle">
+      </PlotLabel>
+      <PlotLabel x={right + 18} y={axis + 5} size={16} face="readingItalic" paint={colour.ink} anchor="middle">
         {xName}
-      </SvgLabel>
-    </g>
+      </PlotLabel>
+    </G>
   );
 }
 
 /** Axes that span the data only: their end labels are the extremes. */
 export function RangeFrame(props: RangeFrameProps) {
   return (
-    <g>
+    <G>
       <YAxis {...props} />
       <XAxis {...props} />
-    </g>
+    </G>
   );
 }

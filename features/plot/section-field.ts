@@ -1,9 +1,9 @@
 import { crossingLetters } from '@/features/notation/crossing-letters';
 import { toDouble } from '@/features/notation/to-double';
-import { compileFormula, type Scope } from '@/features/plot/compile-formula';
-import { planeLevel } from '@/features/plot/plane-level';
-import type { RegionLetter } from '@/features/plot/section-sheet';
 import type { Entry, System } from '@/schemas/generated/contract';
+import { compileFormula, type Scope } from './compile-formula';
+import { planeLevel } from './plane-level';
+import type { RegionLetter } from './section-sheet';
 
 type SystemSection = System['sections'][number];
 type PlanePoint = readonly [number, number];
@@ -19,8 +19,14 @@ export interface SectionField {
 /**
  * The section as a plane of two coordinates: of a system of three variables, the level of one of them.
  * null for every other section, and where a formula cannot be read here.
+ *
+ * @param chosen parameters that differ from the system's.
  */
-export function sectionField(system: System, section: SystemSection): SectionField | null {
+export function sectionField(
+  system: System,
+  section: Pick<SystemSection, 'formula'>,
+  chosen: Readonly<Record<string, string>> = {},
+): SectionField | null {
   const { document } = system;
   const variables = document.variables.map(({ name }) => name);
   const level = planeLevel(section.formula, variables);
@@ -30,7 +36,9 @@ export function sectionField(system: System, section: SystemSection): SectionFie
   const speed = compileFormula(document.equations[level.variable] ?? '');
   const u = compileFormula(section.formula);
   if (!speed || !u) return null;
-  const parameters = Object.fromEntries(document.parameters.map(({ name, value }) => [name, toDouble(value)]));
+  const parameters = Object.fromEntries(
+    document.parameters.map(({ name, value }) => [name, toDouble(chosen[name] ?? value)]),
+  );
   const scopeAt = definedScope(document);
   if (!scopeAt) return null;
   const side = u({ ...parameters, [level.variable]: level.level + 1 }) < 0 ? -1 : 1;

@@ -3,7 +3,9 @@ import { mathName } from '@/features/notation/math-name';
 import type { Trace } from '@/schemas/generated/contract';
 import { crossingTable } from './crossing-table';
 import { Figure } from './figure';
-import { type PlanePoint, SectionPlot } from './section-plot';
+import { SectionPlot } from './lazy-pictures';
+import type { OtherOrbit } from './other-orbits';
+import type { PlanePoint } from './plane-point';
 import { traceCrossings } from './trace-crossings';
 
 export interface SectionFigureProps {
@@ -13,7 +15,10 @@ export interface SectionFigureProps {
   title?: ReactNode;
   caption?: ReactNode;
   known?: readonly PlanePoint[];
-  tangency?: readonly (readonly PlanePoint[])[];
+  /** Crossings of up to three other orbits, named. */
+  others?: readonly OtherOrbit[];
+  /** grad u · f on the section, for the lines of tangency. */
+  sign?: ((x: number, y: number) => number) | null;
   fileName: string;
   selected?: number | null;
   onSelect?: (crossing: number) => void;
@@ -21,7 +26,7 @@ export interface SectionFigureProps {
 
 /** The crossings on the section, with their table. */
 export function SectionFigure(props: SectionFigureProps) {
-  const { trace, names, title, caption, known, tangency, fileName, selected = null, onSelect } = props;
+  const { trace, names, title, caption, known, others, sign, fileName, selected = null, onSelect } = props;
   const crossings = traceCrossings(trace);
   const [a, b] = [trace.variables.indexOf(names[0]), trace.variables.indexOf(names[1])];
   const points = crossings.map(({ point }): PlanePoint => [point[a] ?? 0, point[b] ?? 0]);
@@ -31,7 +36,7 @@ export function SectionFigure(props: SectionFigureProps) {
       name="On the section"
       caption={caption ?? 'The crossings, numbered in order of time.'}
       table={crossingTable(trace.variables, crossings)}
-      data={{ variables: trace.variables, crossings }}
+      data={{ variables: trace.variables, crossings, ...(others && { others }) }}
       fileName={fileName}
       selected={selected}
       {...(onSelect && { onSelect })}
@@ -42,7 +47,8 @@ export function SectionFigure(props: SectionFigureProps) {
           crossings={points}
           {...{ selected, ...size }}
           {...(known && { known })}
-          {...(tangency && { tangency })}
+          {...(others && { others })}
+          {...(sign && { sign })}
           {...(onSelect && { onSelect })}
         />
       )}

@@ -1,16 +1,20 @@
+import { useMemo } from 'react';
+import { G, Path } from 'react-native-svg';
 import { countWord } from '@/features/notation/count-word';
 import { dotPath } from '@/features/notation/dot-path';
-import { SvgLabel } from '@/features/notation/svg-label';
 import { colour, series } from '@/features/ui';
 import { CrossingMarks } from './crossing-marks';
 import { extremeText } from './extreme-text';
+import { levelLines } from './level-lines';
+import { type OtherOrbit, OtherOrbits } from './other-orbits';
+import { placeNames } from './place-names';
+import type { PlanePoint } from './plane-point';
 import { type PlotFrame, plotFrame } from './plot-frame';
+import { PlotLabel } from './plot-label';
 import { PlotPicture } from './plot-picture';
 import { polylinePath } from './polyline-path';
-import { RangeFrame } from './range-frame';
+import { AXIS_OFFSET, RangeFrame } from './range-frame';
 import { rangeOf } from './range-of';
-
-export type PlanePoint = readonly [number, number];
 
 export interface SectionPlotProps {
   /** Names of the two coordinates on the section. */
@@ -19,8 +23,10 @@ export interface SectionPlotProps {
   crossings: readonly PlanePoint[];
   /** Crossings of other entries. */
   known?: readonly PlanePoint[];
-  /** Lines on which the flow is tangent to the section. */
-  tangency?: readonly (readonly PlanePoint[])[];
+  /** Crossings of up to three other orbits, named. */
+  others?: readonly OtherOrbit[];
+  /** grad u · f at a point of the section: the flow is tangent where it is zero. */
+  sign?: ((x: number, y: number) => number) | null;
   width: number;
   height: number;
   selected?: number | null;
@@ -37,33 +43,35 @@ const widened = ([low, high]: [number, number]): [number, number] => {
 
 function Neighbours({ frame, known }: { frame: PlotFrame; known: readonly PlanePoint[] }) {
   const dots = known.map(([x, y]) => dotPath(frame.x(x), frame.y(y), 0.9)).join('');
-  return <path d={dots} fill={colour.staff} />;
+  return <Path d={dots} fill={colour.staff} />;
 }
 
-function Tangency({ frame, lines }: { frame: PlotFrame; lines: readonly (readonly PlanePoint[])[] }) {
-  const path = lines.map((line) => polylinePath(line.map(([x, y]) => [frame.x(x), frame.y(y)] as const))).join('');
-  const first = lines[0]?.[0];
+interface TangencyProps {
+  lines: readonly (readonly { x: number; y: number }[])[];
+  place: { x: number; y: number } | null;
+}
+
+function Tangency({ lines, place }: TangencyProps) {
   return (
-    <g>
-      <path d={path} fill="none" stroke={series[2]} strokeWidth={1.4} strokeDasharray="6 4" />
-      {first ? (
-        <SvgLabel
-          x={frame.x(first[0]) - 6}
-          y={frame.y(first[1]) + 16}
-          face="reading"
-          anchor="end"
-          paint={series[2]}
-          halo={colour.page}
-        >
+    <G>
+      <Path
+        d={lines.map((line) => polylinePath(line.map(({ x, y }) => [x, y] as const))).join('')}
+        fill="none"
+        stroke={series[2]}
+        strokeWidth={1.4}
+        strokeDasharray="6 4"
+      />
+      {place ? (
+        <PlotLabel {...place} face="reading" anchor="middle" paint={series[2]} halo={colour.page}>
           tangency
-        </SvgLabel>
+        </PlotLabel>
       ) : null}
-    </g>
+    </G>
   );
 }
 
 /** A frame with room around the crossings; its axes stand outside that room. */
-function roomyFrame(width: number, height: number, xRange: [number, number], yRange: [number, number]): PlotFrame {
+function roomyFrame(width: number, height: number, xRange: [number, number], yRange: [number, number]) {
   const room = 1 + 2 * AROUND;
   const [w, h] = [(width - 84) / room, (height - 70) / room];
   const margin = { left: 64 + w * AROUND, right: 20 + w * AROUND, top: 26 + h * AROUND, bottom: 44 + h * AROUND };
@@ -72,21 +80,33 @@ function roomyFrame(width: number, height: number, xRange: [number, number], yRa
   return { ...frame, axisShift };
 }
 
-/** The crossings of an orbit on its section, among known ones. */
+/** Lines of tangency in the part of the section that is drawn. */
+function useTangency(sign: SectionPlotProps['sign'], x: readonly [number, number], y: readonly [number, number]) {
+  const [x0, x1, y0, y1] = [...x, ...y];
+  return useMemo(() => (sign ? levelLines(sign, { x: [x0, x1], y: [y0, y1] }) : []), [sign, x0, x1, y0, y1]);
+}
+
+/** The crossings of an orbit on its section, among those of others. */
 export function SectionPlot(props: SectionPlotProps) {
-  const { names, crossings, known = [], tangency = [], width, height, selected = null, onSelect } = props;
-  const xRange = rangeOf(crossings.map(([x]) => x));
-  const yRange = rangeOf(crossings.map(([, y]) => y));
+  const { names, crossings, known = [], others = [], sign, width, height, selected = null, onSelect } = props;
+  const all = [...crossings, ...others.flatMap(({ points }) => points)];
+  const xRange = rangeOf(all.map(([x]) => x));
+  const yRange = rangeOf(all.map(([, y]) => y));
   const frame = roomyFrame(width, height, xRange, yRange);
   const [wideX, wideY] = [widened(xRange), widened(yRange)];
   const isNear = ([x, y]: PlanePoint) => x >= wideX[0] && x <= wideX[1] && y >= wideY[0] && y <= wideY[1];
-  const marks = crossings.map(([x, y]) => ({ x: frame.x(x), y: frame.y(y) }));
-  const words =
-    `${countWord(crossings.length)} crossings on the section: ${names[0]} from ${extremeText(xRange[0])} to ${extremeText(xRange[1])}, ` +
-    `${names[1]} from ${extremeText(yRange[0])} to ${extremeText(yRange[1])}`;
+  const marksOf = (points: readonly PlanePoint[]) => points.map(([x, y]) => ({ x: frame.x(x), y: frame.y(y) }));
+  const marks = marksOf(crossings);
+  const lines = useTangency(sign, wideX, wideY).map(marksOf);
+  const named = others.map(({ name, points }) => ({ name, marks: marksOf(points) }));
+  const [tangencyPlace = null, ...places] = placeNames(marks, [{ name: 'tangency', marks: lines.flat() }, ...named], {
+    width,
+    height,
+    axes: { x: frame.left - AXIS_OFFSET - frame.axisShift.x, y: frame.bottom + AXIS_OFFSET + frame.axisShift.y },
+  });
   return (
     <PlotPicture
-      {...{ width, height, words, marks, selected }}
+      {...{ width, height, words: wordsOf(names, crossings, others), marks, selected }}
       {...(onSelect && { onSelect })}
       valueText={(i) =>
         `crossing ${i + 1}, ${names[0]} = ${extremeText(crossings[i]?.[0] ?? 0)}, ${names[1]} = ${extremeText(crossings[i]?.[1] ?? 0)}`
@@ -94,8 +114,23 @@ export function SectionPlot(props: SectionPlotProps) {
     >
       <RangeFrame frame={frame} xName={names[0]} yName={names[1]} />
       {known.length > 0 ? <Neighbours frame={frame} known={known.filter(isNear)} /> : null}
-      <Tangency frame={frame} lines={tangency.map((line) => line.filter(isNear)).filter((line) => line.length > 1)} />
+      <Tangency lines={lines} place={tangencyPlace} />
+      <OtherOrbits others={named.map((orbit, i) => ({ ...orbit, place: places[i] ?? null }))} />
       <CrossingMarks {...{ marks, selected, width, height }} />
     </PlotPicture>
   );
+}
+
+/** The picture in words. */
+function wordsOf(
+  names: readonly [string, string],
+  crossings: readonly PlanePoint[],
+  others: readonly OtherOrbit[],
+): string {
+  const range = (index: 0 | 1) => {
+    const [low, high] = rangeOf(crossings.map((point) => point[index]));
+    return `${names[index]} from ${extremeText(low)} to ${extremeText(high)}`;
+  };
+  const beside = others.length > 0 ? `; beside those of ${others.map(({ name }) => name).join(', ')}` : '';
+  return `${countWord(crossings.length)} crossings on the section: ${range(0)}, ${range(1)}${beside}`;
 }

@@ -1,16 +1,19 @@
-import { useMemo } from 'react';
+import { type MouseEvent, useMemo } from 'react';
 import { View } from 'react-native';
+import { G, Path, Svg } from 'react-native-svg';
 import { dotPath } from '@/features/notation/dot-path';
 import { formatCount } from '@/features/notation/format-count';
-import { SvgLabel } from '@/features/notation/svg-label';
-import { colour, series } from '@/features/ui';
+import { colour, series, web } from '@/features/ui';
 import { extremeText } from './extreme-text';
+import { LabelRoom } from './label-room';
 import { levelLines, type PlaneBox } from './level-lines';
 import { type PlotFrame, plotFrame } from './plot-frame';
+import { PlotLabel } from './plot-label';
 import { polylinePath } from './polyline-path';
+import { pressedCrossing } from './pressed-crossing';
 import { RangeFrame } from './range-frame';
 import { rangeOf } from './range-of';
-import type { PlanePoint } from './section-plot';
+import type { PlanePoint } from './plane-point';
 
 /** A letter of the itineraries, at its region. */
 export interface RegionLetter {
@@ -43,6 +46,11 @@ const LEAST_MARK = 2;
 const CLEAR = 8;
 /** Crossings drawn; of more an even sample. */
 const MOST_CROSSINGS = 20_000;
+/** Half of the width of "tangency", px; how far from its line its middle stands. */
+const TANGENCY_HALF = 28;
+const ASIDE = 38;
+/** Dots that labels keep off: of more an even sample shows where they are. */
+const MOST_KEPT_OFF = 1000;
 
 const widened = ([low, high]: [number, number]): [number, number] => {
   const more = (high - low) * AROUND;
@@ -54,6 +62,7 @@ function occupied(
   frame: PlotFrame,
   points: readonly PlanePoint[],
   letters: readonly RegionLetter[],
+  label: PxPoint | null,
 ): (x: number, y: number) => boolean {
   const cells = new Set<string>();
   const mark = (px: number, py: number, reach: number) => {
@@ -62,7 +71,14 @@ function occupied(
   };
   for (const [x, y] of points) mark(frame.x(x), frame.y(y), 1);
   for (const { x, y } of letters) mark(frame.x(x), frame.y(y), 2);
+  if (label) for (let dx = -TANGENCY_HALF; dx <= TANGENCY_HALF; dx += CLEAR) mark(label.x + dx, label.y - 4, 1);
   return (px, py) => cells.has(`${Math.floor(px / CLEAR)},${Math.floor(py / CLEAR)}`);
+}
+
+/** A place in the picture, px. */
+interface PxPoint {
+  x: number;
+  y: number;
 }
 
 interface Field {
@@ -121,70 +137,87 @@ function useSheet(props: SectionSheetProps) {
     const margin = marginsFor(width, height);
     const frame = plotFrame({ width, height, xRange, yRange, equal: true, margin });
     const box: PlaneBox = { x: widened(xRange), y: widened(yRange) };
-    const field = sign ? fieldMarks(frame, box, sign, occupied(frame, points, letters)) : null;
     const lines = tangency ?? (sign ? levelLines(sign, box) : []);
+    const label = tangencyPlace(frame, lines, points, letters);
+    const field = sign ? fieldMarks(frame, box, sign, occupied(frame, points, letters, label)) : null;
     const dots = points.map(([x, y]) => dotPath(frame.x(x), frame.y(y), 1)).join('');
-    return { frame, box, field, lines, dots };
+    return { frame, field, lines, label, dots };
   }, [sign, tangency, crossings, letters, width, height]);
 }
 
-function Tangency({ frame, lines }: { frame: PlotFrame; lines: readonly (readonly PlanePoint[])[] }) {
-  const longest = [...lines].sort((a, b) => b.length - a.length)[0];
-  const at = longest?.[Math.floor(longest.length / 2)];
+/** Where the word "tangency" stands: beside its longest line, near the middle, off dots and letters. */
+function tangencyPlace(
+  frame: PlotFrame,
+  lines: readonly (readonly PlanePoint[])[],
+  points: readonly PlanePoint[],
+  letters: readonly RegionLetter[],
+): PxPoint | null {
+  const room = new LabelRoom(frame);
+  const step = Math.max(1, Math.ceil(points.length / MOST_KEPT_OFF));
+  points.forEach(([x, y], i) => {
+    if (i % step === 0) room.take({ x: frame.x(x), y: frame.y(y) }, CLEAR, CLEAR);
+  });
+  for (const { x, y } of letters) room.take({ x: frame.x(x), y: frame.y(y) }, 2 * CLEAR, 2 * CLEAR);
+  const longest = [...lines].sort((a, b) => b.length - a.length)[0] ?? [];
+  const middle = longest.length / 2;
+  const outward = longest.map((point, i) => ({ point, away: Math.abs(i - middle) })).sort((a, b) => a.away - b.away);
+  return room.place(
+    'tangency',
+    outward.flatMap(({ point: [x, y] }) =>
+      [-1, 1].flatMap((side) => [-10, 10].map((dy) => ({ x: frame.x(x) + side * ASIDE, y: frame.y(y) + dy }))),
+    ),
+  );
+}
+
+function Tangency({
+  frame,
+  lines,
+  place,
+}: {
+  frame: PlotFrame;
+  lines: readonly (readonly PlanePoint[])[];
+  place: PxPoint | null;
+}) {
   return (
-    <g>
-      <path
+    <G>
+      <Path
         d={lines.map((line) => polylinePath(line.map(([x, y]) => [frame.x(x), frame.y(y)] as const))).join('')}
         fill="none"
         stroke={series[2]}
         strokeWidth={1.6}
         strokeDasharray="7 5"
       />
-      {at ? (
-        <SvgLabel
-          x={frame.x(at[0]) + 8}
-          y={frame.y(at[1]) - 8}
-          face="reading"
-          size={14}
-          paint={series[2]}
-          halo={colour.page}
-        >
+      {place ? (
+        <PlotLabel {...place} anchor="middle" face="reading" size={14} paint={series[2]} halo={colour.page}>
           tangency
-        </SvgLabel>
+        </PlotLabel>
       ) : null}
-    </g>
+    </G>
   );
 }
 
 /** The section as a map: plus where the flow rises through it, dash where it falls, the tangency, all known crossings. */
 export function SectionSheet(props: SectionSheetProps) {
   const { names, crossings, letters = [], width, height, onPress } = props;
-  const { frame, field, lines, dots } = useSheet(props);
+  const { frame, field, lines, label, dots } = useSheet(props);
   const words =
     `Section sheet: ${formatCount(crossings.length)} known crossings, ${names[0]} from ${extremeText(frame.xRange[0])} to ` +
     `${extremeText(frame.xRange[1])}, ${names[1]} from ${extremeText(frame.yRange[0])} to ${extremeText(frame.yRange[1])}`;
-  const press = (x: number, y: number) => {
-    const near = crossings.findIndex(([a, b]) => Math.hypot(frame.x(a) - x, frame.y(b) - y) < CLEAR);
-    if (near >= 0) onPress?.(near);
+  const onClick = (event: MouseEvent<HTMLElement>) => {
+    const marks = crossings.map(([x, y]) => ({ x: frame.x(x), y: frame.y(y) }));
+    const pressed = pressedCrossing(event, marks, CLEAR);
+    if (pressed !== null) onPress?.(pressed);
   };
   return (
-    <View role="img" aria-label={words}>
-      <svg
-        width={width}
-        height={height}
-        aria-hidden
-        {...(onPress && {
-          onClick: (event: { nativeEvent: { offsetX: number; offsetY: number } }) =>
-            press(event.nativeEvent.offsetX, event.nativeEvent.offsetY),
-        })}
-      >
-        {field ? <path d={field.dash} stroke={colour.staff} strokeWidth={1} /> : null}
-        {field ? <path d={field.plus} stroke={series[0]} strokeWidth={1.2} /> : null}
-        <Tangency frame={frame} lines={lines} />
-        <path d={dots} fill={colour.ink} />
+    <View role="img" aria-label={words} {...web({ onClick })}>
+      <Svg width={width} height={height} aria-hidden>
+        {field ? <Path d={field.dash} stroke={colour.staff} strokeWidth={1} /> : null}
+        {field ? <Path d={field.plus} stroke={series[0]} strokeWidth={1.2} /> : null}
+        <Tangency frame={frame} lines={lines} place={label} />
+        <Path d={dots} fill={colour.ink} />
         <RangeFrame frame={sheetFrame(frame)} xName={names[0]} yName={names[1]} />
         {letters.map(({ letter, x, y }) => (
-          <SvgLabel
+          <PlotLabel
             key={letter}
             x={frame.x(x)}
             y={frame.y(y)}
@@ -194,9 +227,9 @@ export function SectionSheet(props: SectionSheetProps) {
             halo={colour.page}
           >
             {letter}
-          </SvgLabel>
+          </PlotLabel>
         ))}
-      </svg>
+      </Svg>
     </View>
   );
 }

@@ -6,7 +6,7 @@ import type { Trace } from '@/schemas/generated/contract';
 import { crossingTable } from './crossing-table';
 import { Figure } from './figure';
 import type { PlaneLevel } from './plane-level';
-import { TimePlot } from './time-plot';
+import { TimePlot } from './lazy-pictures';
 import { traceCrossings } from './trace-crossings';
 
 export interface TimeFigureProps {

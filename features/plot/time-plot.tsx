@@ -1,3 +1,4 @@
+import { Path } from 'react-native-svg';
 import { countWord } from '@/features/notation/count-word';
 import { series } from '@/features/ui';
 import { mathName } from '@/features/notation/math-name';
@@ -50,14 +51,14 @@ export function TimePlot({
     >
       <RangeFrame frame={frame} xName="t" yName={name} yTicks={level === null ? [0] : [level]} />
       {level === null ? null : (
-        <path
+        <Path
           d={`M${frame.left} ${frame.y(level)}H${frame.right}`}
           stroke={series[2]}
           strokeWidth={1.4}
           strokeDasharray="6 4"
         />
       )}
-      <path d={polylinePath(line)} fill="none" stroke={series[0]} strokeWidth={1.8} strokeLinejoin="round" />
+      <Path d={polylinePath(line)} fill="none" stroke={series[0]} strokeWidth={1.8} strokeLinejoin="round" />
       <CrossingMarks {...{ marks, selected, width, height }} />
     </PlotPicture>
   );

@@ -7,8 +7,8 @@ import { Formula } from '@/features/notation/formula';
 import { mathName } from '@/features/notation/math-name';
 import { extremeText } from '@/features/plot/extreme-text';
 import { Figure } from '@/features/plot/figure';
-import { SectionSheet } from '@/features/plot/section-sheet';
-import { knownCrossings, regionLetters, type SectionField } from '@/features/systems/section-field';
+import { SectionSheet } from '@/features/plot/lazy-pictures';
+import { knownCrossings, regionLetters, type SectionField } from '@/features/plot/section-field';
 import { Text } from '@/features/ui';
 import type { System } from '@/schemas/generated/contract';
 

@@ -6,7 +6,7 @@ import { searchHref } from '@/features/api/page-addresses';
 import { useSystem } from '@/features/api/systems';
 import { formatCount } from '@/features/notation/format-count';
 import { KnownTables } from '@/features/systems/known-tables';
-import { sectionField } from '@/features/systems/section-field';
+import { sectionField } from '@/features/plot/section-field';
 import { SectionSheetFigure } from '@/features/systems/section-sheet-figure';
 import { ShortestOrbit } from '@/features/systems/shortest-orbit';
 import { SystemEquations } from '@/features/systems/system-equations';

@@ -81,4 +81,17 @@ export const frameCss = `
   display: flex; flex-direction: column; gap: 4px; }
 .r-link:hover > .r-card { border-color: var(--staff); }
 .r-card[data-selected] { border-color: var(--verdigris); box-shadow: inset 3px 0 0 var(--verdigris); }
+/* A column that stays while the page scrolls beside it, and scrolls by itself when it is longer than the window. */
+.r-side { position: sticky; top: 71px; flex: none; box-sizing: border-box; max-height: calc(100vh - 71px); max-height: calc(100dvh - 71px);
+  margin-top: -24px; padding: 24px 0; overflow-y: auto; overscroll-behavior: contain; scrollbar-width: thin; }
+.r-side.r-queue { box-sizing: content-box; margin-left: -16px; margin-right: -16px; padding-left: 16px; padding-right: 16px; }
+.r-queue-item { box-sizing: border-box; position: relative; z-index: 0; display: flex; flex-direction: column; gap: 4px; padding: 8px 0;
+  border-top: 1px solid var(--hairline); color: var(--ink); text-decoration: none; }
+.r-queue-item::before { content: ""; position: absolute; z-index: -1; inset: 0 -12px; border-left: 3px solid var(--staff); background: var(--card);
+  opacity: 0; }
+.r-queue-item:hover::before, .r-queue-item:focus-visible::before, .r-queue-item[aria-current="page"]::before { opacity: 1; }
+.r-queue-item[aria-current="page"]::before { border-left-color: var(--ink); }
+.r-queue-line { display: flex; flex-wrap: wrap; justify-content: space-between; align-items: baseline; column-gap: 16px; }
+.r-columns { columns: 2 280px; column-gap: 32px; }
+.r-columns > * { break-inside: avoid; }
 `;

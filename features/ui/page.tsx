@@ -4,7 +4,7 @@ import { DoubleRule } from './double-rule';
 import { Heading } from './heading';
 import { useLayout } from './layout';
 import { LinkText } from './link-text';
-import { font, space } from './tokens';
+import { font, space, touchTarget } from './tokens';
 
 export interface PageProps {
   /** Plain words: the document's title. */
@@ -30,6 +30,11 @@ export interface PageProps {
   children: ReactNode;
 }
 
+/** On a phone the back link stands in for the masthead, px. */
+const BACK_ROW = 56;
+/** With less than this left for the heading its actions stand on a line of their own, px. */
+const HEADING_WIDTH = 180;
+
 function Head(props: PageProps) {
   const { title, heading, italic, large, state, subtitle, actions } = props;
   const phone = useLayout() === 'phone';
@@ -44,7 +49,9 @@ function Head(props: PageProps) {
           paddingBottom: space.half,
         }}
       >
-        <View style={{ flexGrow: 1, flexShrink: 1, minWidth: 0, gap: space.half }}>
+        <View
+          style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: actions ? HEADING_WIDTH : 0, gap: space.half }}
+        >
           <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'baseline', columnGap: space.oneHalf }}>
             <Heading level={1} {...(italic && { italic })} {...(large && !phone && { size: 34 })}>
               {heading ?? title}
@@ -67,6 +74,7 @@ function Head(props: PageProps) {
 /** A page: back link, title on the double rule with its actions, content. */
 export function Page(props: PageProps) {
   const { title, back, aside, hideHeading, children } = props;
+  const phone = useLayout() === 'phone';
   useEffect(() => {
     document.title = `${title} · Ritornel`;
   }, [title]);
@@ -75,7 +83,7 @@ export function Page(props: PageProps) {
       {back || aside ? (
         <View
           style={{
-            minHeight: 44,
+            minHeight: phone ? BACK_ROW : touchTarget,
             flexDirection: 'row',
             alignItems: 'center',
             justifyContent: 'space-between',

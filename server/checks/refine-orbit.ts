@@ -25,8 +25,6 @@ import {
 /** Counted crossings nearer than this share of the period to its end are the closing one itself. */
 const CLOSING_WINDOW = 1e-9;
 
-/** Digits that a refinement may be asked for. */
-export const DIGITS_LARGEST = 100;
 /** Digits that doubles give; a refinement begins beyond. */
 export const DIGITS_OF_DOUBLES = 17;
 

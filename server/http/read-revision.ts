@@ -8,5 +8,7 @@ import { invalidQuery } from '@/server/errors';
 export function readRevision({ revision }: Readonly<Record<string, unknown>>): number | null {
   if (revision === undefined) return null;
   if (typeof revision === 'string' && /^[1-9][0-9]{0,5}$/.test(revision)) return parseInt(revision, 10);
-  throw invalidQuery([{ pointer: '#revision', message: 'revision is a whole number from 1, as /revisions lists them.' }]);
+  throw invalidQuery([
+    { pointer: '#revision', message: 'revision is a whole number from 1, as /revisions lists them.' },
+  ]);
 }

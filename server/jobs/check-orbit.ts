@@ -5,6 +5,7 @@ import type { CheckReport, SystemDocument } from '@/schemas/generated/contract';
 import type { CheckTask } from '@/server/check-thread';
 import type { CheckProgress } from '@/server/checks/check-progress';
 import { overrunReport } from '@/server/jobs/overrun-report';
+import { isThreadLimit, messageOf } from '@/server/jobs/thread-limit';
 import type { Log } from '@/server/log';
 import type { OrbitCheck } from '@/server/models/orbit-check';
 import { catalogueNear } from '@/server/services/catalogue-near';
@@ -62,7 +63,7 @@ async function compute(tools: CheckTools, check: OrbitCheck): Promise<{ report: 
     return { report, computeMs: report.engine.cpuMs };
   } catch (error) {
     const computeMs = Date.now() - startedAt;
-    if (tools.stopping.aborted || !isLimit(error)) throw error;
+    if (tools.stopping.aborted || !isThreadLimit(error)) throw error;
     return { report: overrunReport({ seconds: check.seconds, computeMs, latest }), computeMs };
   } finally {
     port1.close();
@@ -83,15 +84,4 @@ async function inThread(
   } finally {
     clearTimeout(timer);
   }
-}
-
-const LONGEST_MESSAGE = 300;
-
-const messageOf = (error: unknown): string =>
-  (error instanceof Error ? error.message : String(error)).slice(0, LONGEST_MESSAGE);
-
-/** Whether a thread was ended because it took too long or too much memory: an answer, not a crash. */
-function isLimit(error: unknown): boolean {
-  const { name, code } = (error ?? {}) as { name?: unknown; code?: unknown };
-  return name === 'AbortError' || code === 'ERR_WORKER_OUT_OF_MEMORY';
 }

@@ -53,3 +53,29 @@ export const commentedMail = (to: Addressee, news: SubmissionNews, author: strin
     ...quoted(news.comment),
     news.page,
   ]);
+
+/** What came into the queue since the last digest. */
+export interface DigestNews {
+  /** Submissions that are new since the last digest and wait for a curator. */
+  fresh: readonly { number: number; system: string }[];
+  /** All that wait for this curator, these included. */
+  waiting: number;
+  /** Address of the queue. */
+  page: string;
+}
+
+/** Submissions that a digest names; of more it tells how many. */
+const NAMED = 20;
+
+/** The daily mail to a curator about what is new in the queue. */
+export function digestMail(to: Addressee, { fresh, waiting, page }: DigestNews): Mail {
+  const count = fresh.length === 1 ? 'A new submission waits' : `${fresh.length} new submissions wait`;
+  const named = fresh.slice(0, NAMED).map(({ number, system }) => `  ${number}  ${system}`);
+  const rest = fresh.length > NAMED ? [`  and ${fresh.length - NAMED} more`] : [];
+  return mailOf(to, `${count} for a curator`, [
+    `new in the queue since the last of these mails; ${waiting} ${waiting === 1 ? 'waits' : 'wait'} in all:`,
+    [...named, ...rest].join('\n'),
+    page,
+    'This mail comes at most once a day. Turn it off in the menu behind your name.',
+  ]);
+}

@@ -7,6 +7,7 @@ import { Orbit } from '@/server/models/orbit';
 import { OrbitCheck } from '@/server/models/orbit-check';
 import { OrbitRevision } from '@/server/models/orbit-revision';
 import { Reference } from '@/server/models/reference';
+import { Refinement } from '@/server/models/refinement';
 import { Section } from '@/server/models/section';
 import { Submission } from '@/server/models/submission';
 import { SubmissionRevision } from '@/server/models/submission-revision';
@@ -30,4 +31,5 @@ export function defineModels(db: Sequelize): void {
   OrbitRevision.define(db);
   Reference.define(db);
   Crossing.define(db);
+  Refinement.define(db);
 }

@@ -31,6 +31,13 @@ export type EntryContent = Pick<
 > & {
   /** Version of the computation. */
   engine: string;
+  /** How the many digits were found; left out where there are no more than doubles hold. */
+  refinement?: {
+    /** What was held where the orbit belongs to a family; null for an isolated one. */
+    held: string | null;
+    /** Largest miss of a segment, a decimal, in sizes of the orbit's extents; null where the check found the digits. */
+    residual: string | null;
+  };
 };
 
 /** One revision of an entry; the database keeps it from ever changing. */
@@ -41,6 +48,9 @@ export class OrbitRevision extends Model<InferAttributes<OrbitRevision>, InferCr
   declare checkId: string;
   declare madeBy: string | null;
   declare why: string;
+  /** How its figures are known. */
+  declare evidence: Entry['evidence']['level'];
+  declare digits: number;
   declare at: CreationOptional<Date>;
 
   static define(db: Sequelize): typeof OrbitRevision {
@@ -52,6 +62,8 @@ export class OrbitRevision extends Model<InferAttributes<OrbitRevision>, InferCr
         checkId: { type: DataTypes.TEXT, allowNull: false },
         madeBy: { type: DataTypes.UUID },
         why: { type: DataTypes.TEXT, allowNull: false },
+        evidence: { type: DataTypes.TEXT, allowNull: false },
+        digits: { type: DataTypes.INTEGER, allowNull: false },
         at: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
       },
       { sequelize: db, tableName: 'orbit_revision', underscored: true, timestamps: false },

@@ -6,7 +6,7 @@ import {
   Model,
   type Sequelize,
 } from 'sequelize';
-import type { Entry, Stability } from '@/schemas/generated/contract';
+import type { Entry, RefinementObstacle, Stability } from '@/schemas/generated/contract';
 
 /** An entry of the catalogue: the columns that searches use. Its figures are in its revisions. */
 export class Orbit extends Model<InferAttributes<Orbit>, InferCreationAttributes<Orbit>> {
@@ -35,6 +35,8 @@ export class Orbit extends Model<InferAttributes<Orbit>, InferCreationAttributes
   declare itinerary: string | null;
   declare evidence: CreationOptional<Entry['evidence']['level']>;
   declare digits: number;
+  /** Why the last refinement gave no more digits. */
+  declare obstacle: CreationOptional<RefinementObstacle | null>;
   /** In small letters. */
   declare searchText: string;
   /** `[time, value]` pairs of the coordinate that the section's staff shows. */
@@ -71,6 +73,7 @@ export class Orbit extends Model<InferAttributes<Orbit>, InferCreationAttributes
         itinerary: { type: DataTypes.TEXT },
         evidence: { type: DataTypes.TEXT, allowNull: false, defaultValue: 're-integrated' },
         digits: { type: DataTypes.INTEGER, allowNull: false },
+        obstacle: { type: DataTypes.JSON },
         searchText: { type: DataTypes.TEXT, allowNull: false },
         incipit: { type: DataTypes.JSON, allowNull: false },
         submissionId: { type: DataTypes.UUID, allowNull: false },

@@ -20,6 +20,9 @@ export class User extends Model<InferAttributes<User>, InferCreationAttributes<U
   declare passwordHash: string;
   declare confirmedAt: CreationOptional<Date | null>;
   declare createdAt: CreationOptional<Date>;
+  /** Wants the daily mail about new submissions; curators only get it. */
+  declare digest: CreationOptional<boolean>;
+  declare digestSentAt: CreationOptional<Date | null>;
 
   static define(db: Sequelize): typeof User {
     return User.init(
@@ -32,6 +35,8 @@ export class User extends Model<InferAttributes<User>, InferCreationAttributes<U
         passwordHash: { type: DataTypes.TEXT, allowNull: false },
         confirmedAt: { type: DataTypes.DATE },
         createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
+        digest: { type: DataTypes.BOOLEAN, allowNull: false, defaultValue: true },
+        digestSentAt: { type: DataTypes.DATE },
       },
       { sequelize: db, tableName: 'account', underscored: true, timestamps: false },
     );

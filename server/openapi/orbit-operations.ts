@@ -83,7 +83,10 @@ export const orbitOperations: readonly Operation[] = [
       '(.txt). A browser that asks for HTML is sent on to the page with 303.',
     parameters: [
       ACCESSION,
-      queryParameter('revision', 'One of its revisions; the current one unless given.', { type: 'integer', minimum: 1 }),
+      queryParameter('revision', 'One of its revisions; the current one unless given.', {
+        type: 'integer',
+        minimum: 1,
+      }),
       ifNoneMatch,
     ],
     answers: [

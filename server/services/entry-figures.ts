@@ -33,8 +33,13 @@ export const entryContent = (report: ClosedReport, submitted: SubmissionBody): E
     submitted,
     note: submitted.note ?? null,
     engine: report.engine.version,
+    ...(evidenceOf(report).evidence === 'refined' && { refinement: { held: heldIn(report), residual: null } }),
   };
 };
+
+/** What the check held, where the orbit belongs to a family. */
+const heldIn = ({ correction }: ClosedReport): string | null =>
+  correction !== null && correction.freeDirections > 0 ? correction.held : null;
 
 /** How a report knows its figures: to more digits than doubles hold, they were refined. */
 export function evidenceOf({ digits }: ClosedReport): { evidence: Entry['evidence']['level']; digits: number } {

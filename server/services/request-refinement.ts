@@ -1,12 +1,13 @@
-import { Op, type Transaction } from 'sequelize';
 import type { Pool } from 'pg';
-import type { Sequelize } from 'sequelize';
+import { Op, type Sequelize, type Transaction } from 'sequelize';
+import { ENGINE_VERSION } from '@/server/checks/engine-version';
 import { Problem } from '@/server/errors';
 import { Orbit } from '@/server/models/orbit';
 import { Refinement } from '@/server/models/refinement';
 import { allowCheck } from '@/server/services/allow-check';
 import { findEntry } from '@/server/services/find-entry';
 import { queueRefinement } from '@/server/services/queue-refinement';
+import { SECONDS_A_REFINEMENT } from '@/server/services/refinement-limits';
 
 /** Somebody asks for an entry with more digits. */
 export interface RefinementAsked {
@@ -37,12 +38,19 @@ export async function requestRefinement(
   });
 }
 
-/** The refinement that gave an entry these digits or more; null where it has fewer. */
+/**
+ * The refinement that gave an entry these digits or more; null where it has fewer. One that came with them, since its
+ * check was asked for them, gets a record that says so.
+ */
 async function made(orbit: Orbit, digits: number, transaction: Transaction): Promise<Refinement | null> {
   if (orbit.evidence === 're-integrated' || orbit.digits < digits) return null;
+  const { number: orbitNumber } = orbit;
   const revision = { [Op.not]: null };
-  const where = { orbitNumber: orbit.number, digits: { [Op.gte]: digits }, state: 'done', revision } as const;
-  return Refinement.findOne({ where, order: [['digits', 'ASC']], transaction });
+  const where = { orbitNumber, digits: { [Op.gte]: digits }, state: 'done', revision } as const;
+  const found = await Refinement.findOne({ where, order: [['digits', 'ASC']], transaction });
+  const record = { orbitNumber, digits: orbit.digits, askedBy: null, seconds: SECONDS_A_REFINEMENT };
+  const end = { revision: orbit.revision, engineVersion: ENGINE_VERSION, finishedAt: new Date() };
+  return found ?? Refinement.create({ ...record, state: 'done', ...end }, { transaction });
 }
 
 const underWay = (

@@ -24,14 +24,15 @@ export async function beginRefinement(db: Sequelize, id: string): Promise<Refine
 }
 
 /**
- * What has to be computed: always from the figures of the check, so that a family's member stays the one it was
- * whatever number of digits is asked for, and in the version of the system that the entry is about.
+ * What has to be computed: from the figures of the current revision, so that of a family the member is found that the
+ * entry is about, in the version of the system that it is about.
  */
 export async function refineTask(db: Sequelize, { orbitNumber, digits, seconds }: Refinement): Promise<RefineTask> {
   const orbit = await Orbit.findByPk(orbitNumber, { rejectOnEmpty: true });
-  const first = await OrbitRevision.findOne({ where: { orbitNumber, revision: 1 }, rejectOnEmpty: true });
+  const where = { orbitNumber, revision: orbit.revision };
+  const current = await OrbitRevision.findOne({ where, rejectOnEmpty: true });
   const { checked } = await systemVersion(db, orbit.systemId, orbit.systemVersion);
-  const { submitted, point, period, crossings } = first.content;
+  const { submitted, point, period, crossings } = current.content;
   return {
     document: checked.document,
     claim: { ...submitted, parameters: orbit.parameters },

@@ -45,10 +45,12 @@ export function searchOrbits(pool: Pool, search: OrbitSearch, request: PageReque
     const resolved = await resolveSearch(client, search);
     const found = await (resolved.sort === 'distance' ? nearestOrbits : orbitsInOrder)(client, resolved, request);
     const rows = found.slice(0, request.limit);
+    const total = await countOrbits(client, resolved);
     return {
       rows,
       last: found.length > request.limit ? (rows.at(-1)?.place_texts ?? null) : null,
-      ...(await countOrbits(client, resolved)),
+      total,
+      upToSymmetry: await countUpToSymmetry(client, resolved, total),
     };
   });
 }
@@ -79,35 +81,39 @@ const distanceOf = ({ place }: ResolvedSearch, binds: Binds): string =>
     ? 'null::float8'
     : `(select min(x.place <-> ${binds.add(place)}::cube) from crossing x where x.system_id = o.system_id and x.orbit_number = o.number)`;
 
-interface Counts {
-  found: number;
-  /** Entries of which no image was accepted earlier. */
-  different: number;
-  symmetries: string[] | null;
-}
-
-/** How many entries a search has, counted up to `MAX_COUNTED`, and how many up to the symmetries of its system. */
-async function countOrbits(
-  client: PoolClient,
-  search: ResolvedSearch,
-): Promise<Pick<FoundPage, 'total' | 'upToSymmetry'>> {
+/** How many entries a search has, counted up to `MAX_COUNTED`. */
+async function countOrbits(client: PoolClient, search: ResolvedSearch): Promise<OrbitPage['total']> {
   const binds = new Binds();
-  const conditions = orbitConditions(search, binds);
-  const { rows } = await client.query<Counts>(
-    `with found as materialized
-       (select o.number from orbit o where ${conditions.join(' and ')} limit ${binds.add(MAX_COUNTED + 1)}),
-     image as (select i.* from orbit_image i join found o on o.number = i.orbit_number join found m on m.number = i.image_number)
-     select count(*)::integer as found,
-       count(*) filter (where not exists
-         (select from image where image.orbit_number = found.number and image.image_number < found.number))::integer as different,
-       (select array_agg(distinct symmetry order by symmetry) from image) as symmetries
-     from found`,
+  const { rows } = await client.query<{ found: number }>(
+    `select count(*)::integer as found from (${foundNumbers(search, binds)}) o`,
     binds.values,
   );
-  const { found, different, symmetries } = rows[0]!;
-  if (found > MAX_COUNTED) return { total: { value: MAX_COUNTED, relation: 'at-least' }, upToSymmetry: null };
-  return {
-    total: { value: found, relation: 'exact' },
-    upToSymmetry: search.found && symmetries ? { value: different, symmetries } : null,
-  };
+  const found = rows[0]?.found ?? 0;
+  return found > MAX_COUNTED ? { value: MAX_COUNTED, relation: 'at-least' } : { value: found, relation: 'exact' };
+}
+
+function foundNumbers(search: ResolvedSearch, binds: Binds): string {
+  const conditions = orbitConditions(search, binds);
+  return `select o.number from orbit o where ${conditions.join(' and ')} limit ${binds.add(MAX_COUNTED + 1)}`;
+}
+
+/** How many entries of a counted search are left when images of each other count once; null where none are images. */
+async function countUpToSymmetry(
+  client: PoolClient,
+  search: ResolvedSearch,
+  { value, relation }: OrbitPage['total'],
+): Promise<OrbitPage['upToSymmetry']> {
+  if (search.found === null || relation === 'at-least' || value < 2) return null;
+  const binds = new Binds();
+  const { rows } = await client.query<{ repeated: number; symmetries: string[] | null }>(
+    // In two steps: put together, the planner pairs every entry with every other before it looks for images.
+    `with found as materialized (${foundNumbers(search, binds)}),
+     image as materialized (select i.* from found join orbit_image i on i.orbit_number = found.number)
+     select count(distinct orbit_number) filter (where image_number < orbit_number)::integer as repeated,
+       array_agg(distinct symmetry order by symmetry) as symmetries
+     from image where image_number in (select number from found)`,
+    binds.values,
+  );
+  const { repeated, symmetries } = rows[0]!;
+  return symmetries && { value: value - repeated, symmetries };
 }

@@ -121,6 +121,25 @@ describe('an orbit of a family', () => {
   });
 });
 
+describe('the member of a family', () => {
+  /** Half a unit of the last digit for either rounding, sizes below 10. */
+  it('is the same whatever number of digits is asked for, and when it is refined again', () => {
+    const { body } = caseRequest(byId('cr3bp-oterma-L1'));
+    const [thirty, sixty, hundred] = [30, 60, 100].map((digits) => refined(body, digits)) as [
+      Refinement,
+      Refinement,
+      Refinement,
+    ];
+    expectDigits(thirty.period, sixty.period, { digits: 29, size: 1 });
+    expectDigits(sixty.period, hundred.period, { digits: 59, size: 1 });
+    const again = refineOrbit({
+      ...{ system: soundSystem(documentOf(body)), claim: body, orbit: thirty, digits: 60 },
+    }) as Refinement;
+    expectDigits(again.period, thirty.period, { digits: 29, size: 1 });
+    again.point.forEach((text, i) => expectDigits(text, thirty.point[i]!, { digits: 29, size: 1 }));
+  });
+});
+
 describe('what cannot be refined', () => {
   const { body } = caseRequest(byId('lorenz-AB'));
 

@@ -48,6 +48,7 @@ describe('every page', () => {
     '/systems',
     '/systems/lorenz',
     '/bench?system=lorenz',
+    '/releases',
     '/desk',
     '/sign-in',
     '/register',

@@ -43,12 +43,15 @@ describe('the main path', () => {
     await contributor.getByRole('heading', { name: 'Closes', exact: true }).waitFor();
   });
 
-  it('shows it to a curator, who accepts it', async () => {
+  it('shows it to a curator, who accepts it by the keyboard alone', async () => {
     const curator = await visitor(browser);
     await signIn(curator, server.url, server.accounts['curator']!);
-    await curator.getByRole('link', { name: /^Submission/ }).click();
-    await curator.getByRole('radio', { name: 'Accept' }).check();
-    await curator.getByRole('button', { name: 'Accept as the next entry' }).click();
+    await curator.getByRole('link', { name: /^Submission/ }).waitFor();
+    await curator.keyboard.press('j');
+    await curator.keyboard.press('Enter');
+    await curator.getByRole('heading', { name: 'Decision' }).waitFor();
+    await curator.keyboard.press('a');
+    await curator.keyboard.press('Control+Enter');
     await curator.getByText('In the catalogue as RTN-0000001X.').waitFor();
   });
 

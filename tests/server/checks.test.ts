@@ -134,7 +134,8 @@ describe('a body that is wrong', () => {
     ['an unknown member', { colour: 'red' }, [400, 'invalid-body', '/colour']],
     ['an unknown parameter', { parameters: { gamma: '1' } }, [422, 'invalid-content', '/parameters/gamma']],
     ['a tolerance out of range', { tolerance: '1' }, [422, 'invalid-content', '/tolerance']],
-    ['more digits than a double', { digits: 30 }, [400, 'invalid-body', '/digits']],
+    ['more than a hundred digits', { digits: 101 }, [400, 'invalid-body', '/digits']],
+    ['fewer than fifteen digits', { digits: 14 }, [400, 'invalid-body', '/digits']],
   ])('%s is refused and nothing is stored', async (_, change, [status, code, pointer]) => {
     const before = await OrbitCheck.count();
     const res = await check({ ...lorenzOrbit(), ...change });

@@ -72,17 +72,26 @@ describe('the daily mail to curators', () => {
   });
 
   it('leaves out what a curator sent', async () => {
-    await submit(curator, 'AAAB');
-    expect(await send(later(72))).toBe(0);
+    const otto = await signedIn(t.app, await anAccount('curator', { name: 'Otto', email: 'otto@orbits.example' }));
+    const own = await submit(otto, 'AAAB');
+    expect(await send(later(30))).toBe(1);
+    const mail = (await mails()).at(-1);
+    expect(mail).toMatchObject({ recipient: 'otto@orbits.example', subject: '3 new submissions wait for a curator' });
+    expect(mail!.body).not.toContain(`  ${own}  `);
   });
 
   it('can be turned off, by curators for themselves', async () => {
-    const { body } = await curator.patch('/api/v1/session').send({ digest: false }).expect(200);
-    expect(body).toMatchObject({ digest: false, user: { name: 'Cora' } });
-    expect((await curator.get('/api/v1/session')).body.digest).toBe(false);
-    await submit(contributor, 'ABBB');
-    expect(await send(later(96))).toBe(0);
+    const quiet = await signedIn(t.app, await anAccount('curator', { name: 'Quinn', email: 'quinn@orbits.example' }));
+    const { body } = await quiet.patch('/api/v1/session').send({ digest: false }).expect(200);
+    expect(body).toMatchObject({ digest: false, user: { name: 'Quinn' } });
+    expect((await quiet.get('/api/v1/session')).body.digest).toBe(false);
+    expect(await send(later(30))).toBe(0);
+    await quiet.patch('/api/v1/session').send({ digest: true }).expect(200);
+    expect(await send(later(30))).toBe(1);
+    expect((await mails()).at(-1)).toMatchObject({ recipient: 'quinn@orbits.example' });
+  });
 
+  it('is nobody else’s to choose', async () => {
     expect((await contributor.get('/api/v1/session')).body.digest).toBeNull();
     expect((await contributor.patch('/api/v1/session').send({ digest: true })).body.code).toBe('not-allowed');
     expect((await curator.patch('/api/v1/session').send({ digest: 'no' })).status).toBe(400);

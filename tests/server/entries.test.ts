@@ -91,9 +91,24 @@ describe('GET /orbits/:accession', () => {
   });
 });
 
+it.each([
+  ['revision=2', 404, 'not-found'],
+  ['revision=0', 400, 'invalid-query'],
+  ['revision=one', 400, 'invalid-query'],
+])('knows no %s of an entry that has one', async (query, status, code) => {
+  const res = await get(`RTN-0000001X?${query}`);
+  expect([res.status, res.body.code]).toEqual([status, code]);
+});
+
 it('lists the revisions of an entry', async () => {
   const res = await get('RTN-0000001X/revisions');
-  expect(res.body.items).toEqual([{ revision: 1, at: expect.any(String), by: 'Curator Q', why: 'Accepted' }]);
+  expect(res.body.items).toEqual([
+    {
+      ...{ revision: 1, at: expect.any(String), by: 'Curator Q', why: 'Accepted' },
+      evidence: { level: 're-integrated', digits: 13 },
+      links: { self: '/api/v1/orbits/RTN-0000001X?revision=1' },
+    },
+  ]);
   expect(validatorOf('entry-revision')(res.body.items[0])).toBe(true);
   expect((await get('RTN-00000171/revisions')).body.code).toBe('wrong-check-character');
 });

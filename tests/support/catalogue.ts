@@ -110,8 +110,8 @@ async function addEntry(client: PoolClient, parts: Parts): Promise<string> {
     ],
   );
   await client.query(
-    `insert into orbit_revision (orbit_number, revision, content, check_id, made_by, why)
-     values ($1, 1, $2, $3, $4, 'Accepted')`,
+    `insert into orbit_revision (orbit_number, revision, content, check_id, made_by, why, evidence, digits)
+     values ($1, 1, $2, $3, $4, 'Accepted', 're-integrated', 13)`,
     [number, JSON.stringify(content), checkId, curatorId],
   );
   for (const [position, { citation, doi }] of (change.references ?? []).entries()) {
@@ -173,7 +173,7 @@ async function addCrossings(
     await client.query(
       `insert into crossing (system_id, orbit_number, position, time, point, transversality, place)
        values ($1, $2, $3, $4, $5, $6, $7)`,
-      [systemId, number, position, crossing.time, point, crossing.transversality, place],
+      [systemId, number, position + 1, crossing.time, point, crossing.transversality, place],
     );
   }
 }

@@ -17,7 +17,7 @@ export const reportAB: CheckReport = {
     multipliers: entryAB.multipliers,
     unitMultipliers: 1,
     exponents: entryAB.exponents,
-    selfCheck: { flow: 3e-17, liouville: 1e-14 },
+    selfCheck: { flow: 3e-17, liouville: 1e-14, pairing: null },
     stability: 'saddle',
     unstableDirections: 1,
     itinerary: 'AB',
@@ -55,7 +55,12 @@ export const curator: User = {
   createdAt: at,
 };
 
-export const sessionOf = (user: User | null): Session => ({ user, waiting: user ? 1 : 0, development: false });
+export const sessionOf = (user: User | null): Session => ({
+  user,
+  waiting: user ? 1 : 0,
+  digest: user && user.role !== 'contributor' ? true : null,
+  development: false,
+});
 
 export const submissionAB: Submission = {
   id: 's1',

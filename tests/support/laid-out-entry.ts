@@ -88,7 +88,8 @@ async function entry(db: Client, { system, accepted, contributor, curator }: Par
     [system, section, accepted, contributor, curator],
   );
   await db.query(
-    `insert into orbit_revision (orbit_number, revision, content, check_id, why) values (1, 1, '{}', $1, 'accepted')`,
+    `insert into orbit_revision (orbit_number, revision, content, check_id, why, evidence, digits)
+     values (1, 1, '{}', $1, 'accepted', 're-integrated', 13)`,
     [SUBMISSION_CHECK],
   );
   await db.query('commit');

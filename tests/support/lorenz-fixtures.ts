@@ -112,10 +112,11 @@ export const entryAB: Entry = {
     segments: 2,
     held: 'z',
     freeDirections: 0,
+    basinRatio: null,
   },
   verdict: 'closes',
   findings: [],
-  evidence: { level: 're-integrated', digits: 15, engine: '1.0.0' },
+  evidence: { level: 're-integrated', digits: 15, engine: '1.0.0', held: null, obstacle: null },
   submitted: {
     system: 'lorenz',
     section: 'z-27',
@@ -163,6 +164,7 @@ export const pageOf = (...items: Entry[]): OrbitPage => ({
   items,
   next: null,
   total: { value: items.length, relation: 'exact' },
+  upToSymmetry: null,
   incipits: Object.fromEntries(
     items.map(({ accession }) => [
       accession,

@@ -1,6 +1,5 @@
 import { type ShootingChain } from '@/server/numerics/periodic/correct-orbit';
 import { type ShootingPlan } from '@/server/numerics/periodic/shooting-plan';
-import { type Extent } from '@/server/numerics/section/create-extent-watch';
 import { createSectionWatch, type SectionWatch } from '@/server/numerics/section/create-section-watch';
 import { type Flow } from '@/server/numerics/taylor/flow';
 
@@ -33,8 +32,10 @@ interface PointLeg {
 export interface PointChain extends ShootingChain {
   /** What the legs last together. */
   period: number;
-  /** Range of every coordinate along the legs. */
-  extent: Extent;
+  /** What was seen along the legs; the times of its zeros are those since the leg's start. */
+  watch: SectionWatch;
+  /** Times at which steps ended, since the start. */
+  stepEnds: number[];
 }
 
 /**
@@ -56,8 +57,9 @@ export function chainOfPoints(stated: StatedPoints): PointChain | null {
     legs.push(leg);
   }
   const nodes = legs.map(({ node }, i) => (i === 0 ? stated.points[0]! : node));
-  const period = legs.reduce((sum, { duration }) => sum + duration, 0);
-  return { plan: planOf(legs), nodes, period, extent: watch.extent() };
+  const begins = beginsOf(legs);
+  const stepEnds = legs.flatMap((leg, i) => leg.stepEnds.map((end) => begins[i]! + end));
+  return { plan: planOf(legs, stepEnds), nodes, period: begins.at(-1)!, watch, stepEnds };
 }
 
 function legFrom(
@@ -85,13 +87,18 @@ function legFrom(
   return seam.ok ? { duration, stepEnds: stepEnds.filter((end) => end < duration), node: seam.end } : null;
 }
 
-/** Segments from seam to seam, the first from the start and the last to the end, in shares of the whole. */
-function planOf(legs: readonly PointLeg[]): ShootingPlan {
+/** Times at which the legs begin, and at which the last one ends. */
+function beginsOf(legs: readonly PointLeg[]): number[] {
   const begins = [0];
   for (const { duration } of legs) begins.push(begins.at(-1)! + duration);
+  return begins;
+}
+
+/** Segments from seam to seam, the first from the start and the last to the end, in shares of the whole. */
+function planOf(legs: readonly PointLeg[], ends: readonly number[]): ShootingPlan {
+  const begins = beginsOf(legs);
   const whole = begins.at(-1)!;
   const seams = legs.map(({ duration }, i) => (i === 0 ? 0 : begins[i]! + SEAM * duration));
-  const ends = legs.flatMap(({ stepEnds }, i) => stepEnds.map((end) => begins[i]! + end));
   let next = 0;
   return legs.map((_, i) => {
     const [from, to] = [seams[i]!, seams[i + 1] ?? whole];

@@ -245,7 +245,7 @@ class Corrector {
     const section = { gradient: scaled(flow.sectionGradient(first)), value: flow.section(first) };
     const held =
       hold === undefined ? null : { gradient: scaled(hold.gradientAt(first)), value: hold.at(first) - hold.target };
-    return closingCorrection(this.relation!, section, this.rankCutOff(), held);
+    return closingCorrection(this.relation!, section, this.rankCutOff(), { hold: held });
   }
 
   /** Take one Newton step. */

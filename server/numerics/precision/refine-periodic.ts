@@ -39,6 +39,8 @@ export interface RefinementInput {
   sizes: Float64Array;
   /** Gradient of what is held in a family, at the first node, and the value to be kept; null for nothing. */
   hold: { gradient: Float64Array; target: (precision: Precision) => bigint } | null;
+  /** Of a family the member is found that is nearest to this point, in sizes. */
+  anchor: (precision: Precision) => bigint[];
   digits: number;
   shouldStop?: (() => boolean) | undefined;
 }
@@ -260,6 +262,25 @@ class Refiner {
       gradient: scaled(hold.gradient),
       value: doubleOfFixed(values.hold! - hold.target(this.precision), bits),
     };
-    return closingCorrection(relation, section, orbit.rankCutOff, held);
+    return closingCorrection(relation, section, orbit.rankCutOff, {
+      hold: held,
+      driftIn: (open) => this.driftIn(open),
+    });
+  }
+
+  /**
+   * Components of the first node's way from the anchor along a family's directions, in sizes. Taken in fixed point of
+   * weights that are the same doubles for any precision, so that any number of digits finds the same member.
+   */
+  private driftIn(open: Float64Array): Float64Array {
+    const { sizes, anchor } = this.input;
+    const { bits } = this.precision;
+    const origin = anchor(this.precision);
+    const way = this.nodes[0]!.map((x, i) => x - origin[i]!);
+    const width = open.length / way.length;
+    return Float64Array.from({ length: width }, (_, k) => {
+      const weighed = way.map((x, i) => x * fixedOfDouble(open[i * width + k]! / sizes[i]!, bits));
+      return doubleOfFixed(weighed.reduce((sum, term) => sum + term, 0n) >> BigInt(bits), bits);
+    });
   }
 }

@@ -11,6 +11,7 @@ const body = {
   returnTimes: ['0.7793261053580874', '0.7793261053580873'],
   itinerary: 'AB',
   tolerance: '1e-9',
+  digits: 60,
   references: [{ citation: 'a source' }],
   multipliers: ['4.71'],
   note: 'a note',
@@ -54,6 +55,17 @@ describe('formSlips', () => {
       parameters: { rho: '1e' },
     });
     expect(Object.keys(slips).sort()).toEqual(['/parameters/rho', '/period', '/point/1', '/point/2', '/returns']);
+  });
+
+  it.each([
+    ['14', true],
+    ['15', false],
+    ['99', false],
+    ['100', false],
+    ['101', true],
+    ['1e2', true],
+  ])('of %s digits says whether that is too few, too many or no number: %s', (digits, isSlip) => {
+    expect('/digits' in formSlips({ ...emptyDraft, digits })).toBe(isSlip);
   });
 
   it.each(['-13.76', '8/3', '1e-9', '+2'])('takes %s as a number', (period) => {

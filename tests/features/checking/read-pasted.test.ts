@@ -23,6 +23,15 @@ describe('readPasted', () => {
     });
   });
 
+  it('takes the digits that are wanted as a number, and not those that an entry’s row says are known', () => {
+    const row = 'system,period,digits\nlorenz,1.5,60';
+    expect(readPasted(row)?.body).toEqual({ system: 'lorenz', period: '1.5', digits: 60 });
+    expect(readPasted('accession,system,period,digits\nRTN-0000001X,lorenz,1.5,30')).toEqual({
+      body: { system: 'lorenz', period: '1.5' },
+      leftOut: ['accession', 'digits'],
+    });
+  });
+
   it('takes the cells of a spreadsheet, which come with tabs', () => {
     expect(readPasted('system\tperiod\nlorenz\t1.5')?.body).toEqual({ system: 'lorenz', period: '1.5' });
   });

@@ -1,9 +1,15 @@
-import { fireEvent, screen, waitFor } from '@testing-library/react';
+import { fireEvent, screen, waitFor, within } from '@testing-library/react';
 import { SubmissionScreen } from '@/features/desk/submission-screen';
 import type { Submission } from '@/schemas/generated/contract';
 import { curator, sessionOf, submissionAB, submissionPage } from '../../support/desk-fixtures';
 import { fakeArchive, type FakeAnswer, problem, renderScreen } from '../../support/fake-archive';
 import { entryAAB, lorenzSystem, pageOf, traceAB } from '../../support/lorenz-fixtures';
+import { windowWidth } from '../../support/window-width';
+
+const mockPush = jest.fn();
+jest.mock('expo-router', () => ({
+  router: { push: (...to: unknown[]) => mockPush(...to) },
+}));
 
 const answers = (submission: Submission, more: Record<string, FakeAnswer> = {}): Record<string, FakeAnswer> => ({
   'GET /session': { body: sessionOf(curator) },
@@ -14,6 +20,11 @@ const answers = (submission: Submission, more: Record<string, FakeAnswer> = {}):
   'GET /orbits': { body: pageOf(entryAAB) },
   'POST /submissions/s1/claim': { body: submission, headers: { ETag: '"v3-a"' } },
   ...more,
+});
+
+beforeEach(() => {
+  windowWidth(1200);
+  sessionStorage.clear();
 });
 
 const show = () => renderScreen(<SubmissionScreen submissionId="s1" />);
@@ -48,7 +59,22 @@ describe('the page of a submission', () => {
     await screen.findByRole('heading', { name: 'Decision' });
     fireEvent.keyDown(window, { key: 'r' });
     expect(await screen.findByRole('button', { name: 'Return to the contributor' })).toBeTruthy();
+    expect(document.activeElement).toBe(screen.getByLabelText(/Reason, shown/));
     expect(calls.some(({ path }) => path.endsWith('/decision'))).toBe(false);
+  });
+
+  it('records by Ctrl Enter from anywhere, once it is chosen', async () => {
+    const accepted: Submission = { ...submissionAB, reviewState: 'accepted', turn: null, accession: 'RTN-00000175' };
+    const calls = fakeArchive(
+      answers(submissionAB, { 'POST /submissions/s1/decision': { body: accepted, headers: { ETag: '"v4-b"' } } }),
+    );
+    show();
+    await screen.findByRole('heading', { name: 'Decision' });
+    fireEvent.keyDown(window, { key: 'Enter', ctrlKey: true });
+    expect(calls.some(({ path }) => path.endsWith('/decision'))).toBe(false);
+    fireEvent.keyDown(window, { key: 'a' });
+    fireEvent.keyDown(window, { key: 'Enter', ctrlKey: true });
+    await waitFor(() => expect(calls.some(({ path }) => path.endsWith('/decision'))).toBe(true));
   });
 
   it('keeps the text when the submission changed meanwhile', async () => {
@@ -98,5 +124,46 @@ describe('the page of a submission', () => {
     });
     show();
     await waitFor(() => expect(screen.getByText(/There is nothing at this address/)).toBeTruthy());
+  });
+
+  it('keeps what was written until it is recorded', async () => {
+    fakeArchive(answers(submissionAB));
+    const first = show();
+    fireEvent.change(await screen.findByLabelText(/Reason, shown/), { target: { value: 'Half a sen' } });
+    first.unmount();
+    show();
+    expect((await screen.findByLabelText<HTMLTextAreaElement>(/Reason, shown/)).value).toBe('Half a sen');
+  });
+
+  it('opens the next one that waits once a decision is recorded', async () => {
+    const accepted: Submission = { ...submissionAB, reviewState: 'accepted', turn: null, accession: 'RTN-00000175' };
+    fakeArchive(
+      answers(submissionAB, {
+        'GET /submissions': { body: submissionPage(submissionAB, { ...submissionAB, id: 's2', number: 42 }) },
+        'POST /submissions/s1/decision': { body: accepted, headers: { ETag: '"v4-b"' } },
+      }),
+    );
+    show();
+    await choose(/Accept/);
+    fireEvent.click(screen.getByRole('button', { name: 'Accept as the next entry' }));
+    await waitFor(() => expect(mockPush).toHaveBeenCalledWith('/desk/s2'));
+  });
+
+  it('decides from a sheet on a phone', async () => {
+    windowWidth(390);
+    const returned: Submission = { ...submissionAB, reviewState: 'returned', turn: 'contributor' };
+    const calls = fakeArchive(
+      answers(submissionAB, { 'POST /submissions/s1/decision': { body: returned, headers: { ETag: '"v4-b"' } } }),
+    );
+    show();
+    fireEvent.click(await screen.findByRole('button', { name: 'Return' }));
+    const sheet = screen.getByRole('dialog', { name: 'Return submission 41' });
+    fireEvent.change(within(sheet).getByLabelText(/Reason, shown/), { target: { value: 'Which section?' } });
+    fireEvent.click(within(sheet).getByRole('button', { name: 'Return to the contributor' }));
+    await waitFor(() => expect(calls.find(({ path }) => path.endsWith('/decision'))).toBeTruthy());
+    expect(calls.find(({ path }) => path.endsWith('/decision'))?.body).toMatchObject({
+      decision: 'return',
+      comment: 'Which section?',
+    });
   });
 });

@@ -12,7 +12,9 @@ jest.mock('expo-router', () => ({
   router: { push: (...to: unknown[]) => mockPush(...to), replace: (...to: unknown[]) => mockReplace(...to) },
 }));
 
-const session = (user: Session['user'], waiting = 0): FakeAnswer => ({ body: { user, waiting, development: false } });
+const session = (user: Session['user'], waiting = 0): FakeAnswer => ({
+  body: { user, waiting, digest: user ? true : null, development: false },
+});
 const curator: Session['user'] = {
   id: '00000000-0000-4000-8000-000000000001',
   name: 'Paul Weidner',
@@ -124,5 +126,19 @@ describe('the frame on a phone', () => {
     expect(screen.getByText('PW')).toBeTruthy();
     expect(screen.getByRole('link', { name: '← Systems' }).getAttribute('href')).toBe('/systems');
     expect(screen.getAllByRole('navigation', { name: 'Places' })).toHaveLength(1);
+  });
+
+  it('lets a curator turn the daily mail off', async () => {
+    const calls = fakeArchive({
+      'GET /session': session(curator),
+      'PATCH /session': { body: { user: curator, waiting: 0, digest: false, development: false } },
+    });
+    show();
+    fireEvent.click(await screen.findByRole('button', { name: /Paul Weidner/ }));
+    const box = await screen.findByRole<HTMLInputElement>('checkbox', { name: /A daily mail/ });
+    expect(box.checked).toBe(true);
+    fireEvent.click(box);
+    await waitFor(() => expect(box.checked).toBe(false));
+    expect(calls.find(({ method }) => method === 'PATCH')?.body).toEqual({ digest: false });
   });
 });

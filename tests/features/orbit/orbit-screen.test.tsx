@@ -1,15 +1,24 @@
 import { fireEvent, screen, waitFor, within } from '@testing-library/react';
 import { OrbitScreen } from '@/features/orbit/orbit-screen';
-import type { Entry } from '@/schemas/generated/contract';
+import type { Entry, EntryRevision } from '@/schemas/generated/contract';
 import { type FakeAnswer, fakeArchive, problem, renderScreen } from '../../support/fake-archive';
 import { entryAAB, entryAB, lorenzSystem, pageOf, traceAB } from '../../support/lorenz-fixtures';
 import { windowWidth } from '../../support/window-width';
+
+const revisionOf = (revision: number): EntryRevision => ({
+  revision,
+  at: '2026-03-16T10:00:00.000Z',
+  by: revision === 1 ? 'Paul Weidner' : null,
+  why: revision === 1 ? 'Accepted.' : 'Refined to 30 digits by the archive.',
+  evidence: revision === 1 ? { level: 're-integrated', digits: 15 } : { level: 'refined', digits: 30 },
+  links: { self: `/api/v1/orbits/RTN-0000001X?revision=${revision}` },
+});
 
 const answers = (entry: Entry = entryAB): Record<string, FakeAnswer> => ({
   [`GET /orbits/${entry.accession}`]: { body: entry },
   [`GET /orbits/${entry.accession}/trace`]: { body: traceAB },
   [`GET /orbits/${entry.accession}/revisions`]: {
-    body: { items: [{ revision: 1, at: '2026-03-16T10:00:00.000Z', by: 'Paul Weidner', why: 'accepted' }] },
+    body: { items: [revisionOf(1)] },
   },
   'GET /systems/lorenz': { body: lorenzSystem },
   'GET /orbits': { body: pageOf(entryAB, entryAAB) },
@@ -176,5 +185,19 @@ describe('the page of an entry on a phone', () => {
     const strip = await screen.findByRole('group', { name: 'Actions on the entry' });
     expect(within(strip).getByRole('button', { name: 'Copy all' })).toBeTruthy();
     expect(screen.getByRole('button', { name: 'Copy closure' })).toBeTruthy();
+  });
+
+  it('names the entry that is its image, and has the line to cite', async () => {
+    fakeArchive({
+      ...answers(),
+      'GET /orbits/RTN-0000001X/images': { body: { items: [{ accession: 'RTN-00000256', symmetry: 'half-turn' }] } },
+      'GET /orbits/RTN-0000001X.txt': { body: 'Ida Marten: Periodic orbit RTN-0000001X.\n' },
+    });
+    show();
+    expect((await screen.findByRole('link', { name: 'RTN-00000256' })).parentElement?.textContent).toBe(
+      'Its image under the half-turn: RTN-00000256',
+    );
+    expect(await screen.findByText('Ida Marten: Periodic orbit RTN-0000001X.')).toBeTruthy();
+    expect(screen.getByRole('button', { name: 'Copy citation' })).toBeTruthy();
   });
 });

@@ -31,7 +31,7 @@ describe('chainOfPoints', () => {
     const points = pointsWithin(0.03);
     const chain = chainOfPoints({ ...LIMITS, points })!;
     const moduli = [null, null, null];
-    const sizes = orbitSizes(chain.extent, moduli);
+    const sizes = orbitSizes(chain.watch.extent(), moduli);
     const found = correctOrbit({
       ...{ flow, start: points[0]!, period: chain.period, stepEnds: [], chain, sizes, moduli, maxSteps: 1e5 },
     });
