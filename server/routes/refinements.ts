@@ -34,7 +34,7 @@ export function refinementRoutes(dependencies: AppDependencies): Router {
 
   router.get(`${address}/:id`, async (req, res) => {
     const id = idParameter(req, 'refinement');
-    const { accession, refinements } = await findRefinements(pool, String(req.params['accession']), id);
+    const { accession, refinements } = await findRefinements(pool, req.params['accession'], id);
     res.set('Cache-Control', 'no-store').json(presentRefinement(refinements[0]!, accession));
   });
 
