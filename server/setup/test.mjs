@@ -5,11 +5,17 @@ import { bootstrap, root } from './bootstrap.mjs';
 import { runChecks } from './checks.mjs';
 import { run, say } from './machine.mjs';
 
-/** The end-to-end project comes last and one file at a time: each of its files runs the whole product. */
+/** What computes or draws takes every core; jest alone would leave one free, of two half. */
+const ALL_CORES = ['--maxWorkers=100%'];
+
+/**
+ * The server's tests wait for one another's databases and watch clocks: they get what jest gives them. The end-to-end
+ * project comes last and one file at a time: each of its files runs the whole product.
+ */
 const RUNS = [
-  { name: 'numerics', args: [] },
+  { name: 'numerics', args: ALL_CORES },
   { name: 'contract', args: [] },
-  { name: 'features', args: [] },
+  { name: 'features', args: ALL_CORES },
   { name: 'server', args: [] },
   { name: 'e2e', args: ['--runInBand'] },
 ];
