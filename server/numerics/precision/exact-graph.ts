@@ -1,5 +1,5 @@
 import { type BinaryOperation, Graph, type Unary } from '@/server/numerics/expression/graph';
-import { rational, type Rational, rationalOfDouble } from '@/server/numerics/precision/rational';
+import { combineRationals, rational, type Rational, rationalOfDouble } from '@/server/numerics/precision/rational';
 
 /** Powers up to this are looked at whether they are exact. */
 const LARGEST_POWER = 64;
@@ -25,19 +25,8 @@ export class ExactGraph extends Graph {
 
 function exactResult(operation: BinaryOperation, x: number, y: number): Rational | null {
   const [a, b] = [rationalOfDouble(x), rationalOfDouble(y)];
-  switch (operation) {
-    case 'add':
-      return rational(a.p * b.q + b.p * a.q, a.q * b.q);
-    case 'subtract':
-      return rational(a.p * b.q - b.p * a.q, a.q * b.q);
-    case 'multiply':
-      return rational(a.p * b.p, a.q * b.q);
-    case 'divide':
-      return b.p === 0n ? null : rational(a.p * b.q, a.q * b.p);
-    case 'power': {
-      if (!Number.isInteger(y) || Math.abs(y) > LARGEST_POWER || (y < 0 && x === 0)) return null;
-      const size = BigInt(Math.abs(y));
-      return y < 0 ? rational(a.q ** size, a.p ** size) : rational(a.p ** size, a.q ** size);
-    }
-  }
+  if (operation !== 'power') return combineRationals(operation, a, b);
+  if (!Number.isInteger(y) || Math.abs(y) > LARGEST_POWER || (y < 0 && x === 0)) return null;
+  const size = BigInt(Math.abs(y));
+  return y < 0 ? rational(a.q ** size, a.p ** size) : rational(a.p ** size, a.q ** size);
 }

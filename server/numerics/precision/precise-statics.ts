@@ -10,7 +10,13 @@ import {
   fixedSinCos,
   fixedSqrt,
 } from '@/server/numerics/precision/fixed-functions';
-import { fixedOfRational, rational, type Rational, rationalOfDouble } from '@/server/numerics/precision/rational';
+import {
+  combineRationals,
+  fixedOfRational,
+  rational,
+  type Rational,
+  rationalOfDouble,
+} from '@/server/numerics/precision/rational';
 
 /** An exact parameter, or π. */
 export type ExactValue = Rational | 'pi';
@@ -64,14 +70,13 @@ function exactly(
   if (b === null) return null;
   switch (operation) {
     case 'add':
-      return rational(a.p * b.q + b.p * a.q, a.q * b.q);
     case 'subtract':
-      return rational(a.p * b.q - b.p * a.q, a.q * b.q);
     case 'multiply':
-      return rational(a.p * b.p, a.q * b.q);
-    case 'divide':
-      if (b.p === 0n) throw new RangeError('a constant is divided by zero');
-      return rational(a.p * b.q, a.q * b.p);
+    case 'divide': {
+      const exact = combineRationals(operation, a, b);
+      if (exact === null) throw new RangeError('a constant is divided by zero');
+      return exact;
+    }
     default:
       return null;
   }

@@ -13,6 +13,24 @@ export function rational(p: bigint, q = 1n): Rational {
   return { p: p / divisor, q: q / divisor };
 }
 
+/** The four operations, exactly; null for a division by zero. */
+export function combineRationals(
+  operation: 'add' | 'subtract' | 'multiply' | 'divide',
+  a: Rational,
+  b: Rational,
+): Rational | null {
+  switch (operation) {
+    case 'add':
+      return rational(a.p * b.q + b.p * a.q, a.q * b.q);
+    case 'subtract':
+      return rational(a.p * b.q - b.p * a.q, a.q * b.q);
+    case 'multiply':
+      return rational(a.p * b.p, a.q * b.q);
+    case 'divide':
+      return b.p === 0n ? null : rational(a.p * b.q, a.q * b.p);
+  }
+}
+
 /**
  * Read a decimal, with or without exponent, or a fraction of integers, exactly.
  *
